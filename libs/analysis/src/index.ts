@@ -1,0 +1,3 @@
+export * from './analysis-document';
+export * from './rig-description';
+export * from './series/log-frames';
