@@ -1,28 +1,30 @@
 import { at } from '../statistics/at';
 
 /**
- * Play operator: where the driven side of a gap stands when the driving side goes along `drive`. The driven side
- * rests inside the gap and is pushed only at its ends: after a reversal it does not move until the gap is taken up.
+ * Play operator: where the driven side of a gap stands when the driver goes along its way. The driven side rests
+ * inside the gap and is pushed only at its ends: after a reversal it stays until the gap is crossed.
  *
- *     out[n] = min( max(out[n−1], drive[n] − width/2), drive[n] + width/2 ),   out[0] = drive[0]
+ *     place[n] = min( max(place[n−1], driver[n] − width), driver[n] ),   place[−1] = driver[0] − lag
  *
- * O(n). Linear in scale: play(a·drive, a·width) = a·play(drive, width) for a > 0.
+ * O(n), no allocation; `out` may be `driver` itself.
  *
- * @param drive n positions, any unit.
- * @param width Width of the gap in the unit of `drive`, 0 or more; 0 gives `drive` back.
+ * @param driver Places of the driver, n values, any unit.
+ * @param width Width of the gap in the unit of `driver`, 0 or more.
+ * @param lag How far the driven side stands behind the driver at the start, 0 to `width`.
+ * @param out n values, written over and returned.
  * @see M. A. Krasnosel'skii, A. V. Pokrovskii, Systems with Hysteresis (1989), ch. 1.
  */
-export function play(drive: ArrayLike<number>, width: number): Float64Array {
-  const driven = new Float64Array(drive.length);
-  let position = at(drive, 0);
-  for (let n = 0; n < driven.length; n++) {
-    position = playStep(position, at(drive, n), width);
-    driven[n] = position;
+export function playInto(
+  driver: ArrayLike<number>,
+  width: number,
+  lag: number,
+  out: Float64Array,
+): Float64Array {
+  let place = at(driver, 0) - lag;
+  for (let n = 0; n < out.length; n++) {
+    const front = at(driver, n);
+    place = Math.min(Math.max(place, front - width), front);
+    out[n] = place;
   }
-  return driven;
-}
-
-/** One step of `play`: where the driven side goes when the driving side has moved to `drive`. */
-export function playStep(driven: number, drive: number, width: number): number {
-  return Math.min(Math.max(driven, drive - width / 2), drive + width / 2);
+  return out;
 }

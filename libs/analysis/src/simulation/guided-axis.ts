@@ -1,4 +1,3 @@
-import { playStep } from '../mount/play';
 import { SIDEREAL_RATE_ARCSEC_PER_SECOND } from '../spectrum/gear-periods';
 import { type GuiderAxis, type NightScenario } from './night-scenario';
 
@@ -36,7 +35,10 @@ export class GuidedAxis {
     if (pulseMs === 0) return 0;
     const factor = pulseMs > 0 ? response.positive : response.negative;
     this.drivenArcsec += pulseMs * this.expectedArcsecPerMs * factor;
-    this.movedArcsec = playStep(this.movedArcsec, this.drivenArcsec, this.backlashArcsec);
+    // One step of mount/play: the star rests inside the gap and is pushed only at its ends.
+    const half = this.backlashArcsec / 2;
+    const pushed = Math.max(this.movedArcsec, this.drivenArcsec - half);
+    this.movedArcsec = Math.min(pushed, this.drivenArcsec + half);
     const written =
       this.guider.correctionUnit === 'ms' ? pulseMs : pulseMs * this.expectedArcsecPerMs;
     return this.guider.loggedSign === 'same' ? written : -written;
