@@ -1,0 +1,46 @@
+import { HttpClient, httpResource, type HttpResourceRef } from '@angular/common/http';
+import { inject, Injectable, type Signal } from '@angular/core';
+import { type CreateRig, pageOf, type Rig, rigPaths, rigSchema } from '@stillpier/contract';
+import { firstValueFrom } from 'rxjs';
+import { SessionApi } from './session-api';
+
+// The form of every file here: one resource a file, paths and schemas from the contract, each answer parsed on arrival.
+// Reads are resources (httpResource is experimental in Angular 21 and stays inside this folder), writes are promises
+// that reject with ProblemError.
+
+const rigPageSchema = pageOf(rigSchema);
+
+@Injectable({ providedIn: 'root' })
+export class RigsApi {
+  private readonly http = inject(HttpClient);
+  private readonly session = inject(SessionApi);
+
+  /** The rigs of the account: shared by the rig picker and the pages, so reload it after a change. */
+  readonly list: HttpResourceRef<Rig[] | undefined> = httpResource(
+    () => (this.session.account() ? { url: rigPaths.all, params: { limit: 1000 } } : undefined),
+    { parse: (body) => rigPageSchema.parse(body).items },
+  );
+
+  one(rigId: Signal<string>): HttpResourceRef<Rig | undefined> {
+    return httpResource(() => rigPaths.one(rigId()), { parse: (body) => rigSchema.parse(body) });
+  }
+
+  async create(body: CreateRig): Promise<Rig> {
+    const rig = rigSchema.parse(await firstValueFrom(this.http.post(rigPaths.all, body)));
+    this.list.reload();
+    return rig;
+  }
+
+  /** Refused with status 412 when the rig is no longer at `version`. */
+  async update(rigId: string, version: number, body: CreateRig): Promise<Rig> {
+    const headers = { 'If-Match': `"${version}"` };
+    const answer = await firstValueFrom(this.http.put(rigPaths.one(rigId), body, { headers }));
+    this.list.reload();
+    return rigSchema.parse(answer);
+  }
+
+  async remove(rigId: string): Promise<void> {
+    await firstValueFrom(this.http.delete(rigPaths.one(rigId)));
+    this.list.reload();
+  }
+}

@@ -1,0 +1,69 @@
+const formats = new Map<string, Intl.DateTimeFormat>();
+
+function format(timeZone: string, options: Intl.DateTimeFormatOptions): Intl.DateTimeFormat {
+  const key = JSON.stringify([timeZone, options]);
+  const known = formats.get(key);
+  if (known) return known;
+  const made = new Intl.DateTimeFormat('en-GB', { timeZone, ...options });
+  formats.set(key, made);
+  return made;
+}
+
+const HOUR_MINUTE = { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' } as const;
+
+/** `21:43` at the site. */
+export function clockText(epochMs: number, timeZone: string): string {
+  return format(timeZone, HOUR_MINUTE).format(epochMs);
+}
+
+/** `21:43:05` at the site. */
+export function clockSecondsText(epochMs: number, timeZone: string): string {
+  return format(timeZone, { ...HOUR_MINUTE, second: '2-digit' }).format(epochMs);
+}
+
+/** `UTC+1`, as the zone stood at that instant. */
+export function zoneOffsetText(epochMs: number, timeZone: string): string {
+  const parts = format(timeZone, { timeZoneName: 'shortOffset' }).formatToParts(epochMs);
+  const name = parts.find((part) => part.type === 'timeZoneName')?.value ?? timeZone;
+  return name.replace('GMT', 'UTC').replace('-', '\u2212');
+}
+
+/** `28–29 November 2026` for the evening date of a night, which ends at noon of the next day. */
+export function nightDatesText(date: string): string {
+  const evening = new Date(`${date}T00:00:00Z`);
+  const morning = new Date(evening.getTime() + 86_400_000);
+  return format('UTC', { day: 'numeric', month: 'long', year: 'numeric' })
+    .formatRange(evening, morning)
+    .replace(/\s–\s/g, ' – ');
+}
+
+/** `28 Nov 2026`. */
+export function dayText(date: string): string {
+  return format('UTC', { day: 'numeric', month: 'short', year: 'numeric' }).format(
+    new Date(`${date}T00:00:00Z`),
+  );
+}
+
+const TICK_STEPS_SECONDS = [1, 2, 5, 10, 30, 60, 120, 300, 600, 900, 1800, 3600, 7200];
+
+/** Round clock times between two instants, at most `most` of them, on even steps of the site's clock. */
+export function clockTicks(fromMs: number, toMs: number, most: number, timeZone: string): number[] {
+  const span = toMs - fromMs;
+  const step =
+    1000 * (TICK_STEPS_SECONDS.find((seconds) => span / (seconds * 1000) <= most) ?? 14_400);
+  const offsetMs = zoneOffsetMs(fromMs, timeZone);
+  const ticks: number[] = [];
+  for (let t = Math.ceil((fromMs + offsetMs) / step) * step - offsetMs; t <= toMs; t += step) {
+    ticks.push(t);
+  }
+  return ticks;
+}
+
+function zoneOffsetMs(epochMs: number, timeZone: string): number {
+  const parts = format(timeZone, { ...HOUR_MINUTE, second: '2-digit' }).formatToParts(epochMs);
+  const part = (type: string): number => Number(parts.find((p) => p.type === type)?.value);
+  const local = ((part('hour') * 60 + part('minute')) * 60 + part('second')) * 1000;
+  const ofDay = Math.floor(epochMs / 1000) * 1000;
+  const utc = ((ofDay % 86_400_000) + 86_400_000) % 86_400_000;
+  return local - utc;
+}

@@ -1,0 +1,5 @@
+import * as z from 'zod';
+
+// The content security policy forbids `new Function`, which zod would try. Loaded as a polyfill, since a chunk that
+// makes schemas may run before main.ts does.
+z.config({ jitless: true });
