@@ -29,6 +29,14 @@ const onlyImports = (message, ...allowed) => ({
     { patterns: [{ regex: `^(?!\\.|${allowed.join('|')})`, message }] },
   ],
 });
+const notTheServer = group(
+  'The client may not import the server.',
+  '**/server/**',
+  'express',
+  'knex',
+  'objection',
+  'node:*',
+);
 const notTheClient = group(
   'The server may not import the client.',
   '**/apps/**',
@@ -116,9 +124,7 @@ export default defineConfig(
       '@angular-eslint/no-uncalled-signals': 'error',
       '@angular-eslint/use-lifecycle-interface': 'error',
       '@typescript-eslint/unbound-method': ['error', { ignoreStatic: true }], // Validators.required
-      ...restrict(
-        group('The client may not import the server.', '**/server/**', 'express', 'node:*'),
-      ),
+      ...restrict(notTheServer),
     },
   },
   {
@@ -137,6 +143,7 @@ export default defineConfig(
     files: ['apps/web/src/app/figures/**/*.ts'],
     ignores: ['**/*.spec.ts'],
     rules: restrict(
+      notTheServer,
       group(
         'Figures draw numbers: they know no HTTP and no page.',
         '**/api/**',
