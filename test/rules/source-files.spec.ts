@@ -24,9 +24,11 @@ const sources = LONGEST.flatMap(([folder, limit]) =>
     .map((file) => ({ file: join(folder, file), limit })),
 ).map(({ file, limit }) => ({ file, limit, text: readFileSync(file, 'utf8') }));
 
-const offenders = (pattern: RegExp) =>
+const withoutComments = (text: string) => text.replace(/^\s*(\/\*\*|\*|\/\/).*$/gm, '');
+
+const offenders = (pattern: RegExp, read = (text: string) => text) =>
   sources
-    .filter(({ file, text }) => !file.startsWith('test/rules/') && pattern.test(text))
+    .filter(({ file, text }) => !file.startsWith('test/rules/') && pattern.test(read(text)))
     .map(({ file }) => file);
 
 describe('the source files', () => {
@@ -42,7 +44,8 @@ describe('the source files', () => {
   });
 
   it('silence neither types nor lint', () => {
-    expect(offenders(/@ts-(ignore|nocheck)|\bas any\b|: any\b|eslint-disable/)).toEqual([]);
+    expect(offenders(/@ts-(ignore|nocheck)|eslint-disable/)).toEqual([]);
+    expect(offenders(/\bas any\b|: any\b|<any>/, withoutComments)).toEqual([]);
   });
 
   it('hold no skipped or focused test and nothing left for later', () => {
