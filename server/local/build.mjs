@@ -27,8 +27,8 @@ async function bundleServer(root) {
   await build({
     entryPoints: {
       main: entry('main.ts'),
-      worker: entry('worker-main.ts'),
-      migrate: entry('migrate-main.ts'),
+      worker: entry('worker.ts'),
+      migrate: entry('migrate.ts'),
       'mail-catcher': entry('local/mail-catcher.ts'),
     },
     outdir: join(root, 'dist/server'),
