@@ -70,10 +70,23 @@ export const changePasswordSchema = z.strictObject({
 export type ChangePassword = z.infer<typeof changePasswordSchema>;
 
 export const accountPaths = {
+  /** POST signUpSchema: 202 MailSent. */
   accounts: '/api/v1/accounts',
+  /** POST confirmAccountSchema: 201 Account, which may sign in from now on. */
   confirmations: '/api/v1/accounts/confirmations',
+  /** GET: 200 Session; POST signInSchema: 200 Session; DELETE: 204. */
   session: '/api/v1/session',
+  /** GET: 200 Account; PATCH renameAccountSchema: 200 Account. */
   account: '/api/v1/account',
+  /** PUT changePasswordSchema: 204, and the other sessions of the account end. */
   password: '/api/v1/account/password',
+  /** POST requestPasswordResetSchema: 202 MailSent; PUT resetPasswordSchema: 204. */
   passwordResets: '/api/v1/password-resets',
+} as const;
+
+/** Pages of the client that e-mails lead to. A token behind `#` reaches neither log nor Referer. */
+export const accountPages = {
+  signIn: '/sign-in',
+  confirm: (token: string) => `/confirm#token=${token}`,
+  resetPassword: (token: string) => `/reset-password#token=${token}`,
 } as const;
