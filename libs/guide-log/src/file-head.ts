@@ -1,0 +1,54 @@
+import { type ColumnMap } from './column-map';
+import { type ColumnPlan, planColumns } from './column-plan';
+import { type DecodedText } from './decoded-text';
+import { type Dialect, sniffDialect } from './dialect';
+import { GuideLogError } from './guide-log-error';
+import { type LineEnds } from './line-ends';
+
+/** The dialect is found from this many bytes, in the preview and in the whole file alike. */
+export const HEAD_BYTES = 65_536;
+
+/** More control characters than one in this many: the file holds something else than text. */
+const CHARACTERS_PER_CONTROL = 200;
+
+/**
+ * Text of the first bytes.
+ *
+ * @throws {GuideLogError} `empty`, `binary`.
+ */
+export function decodeHead(
+  head: Uint8Array,
+  isWholeFile: boolean,
+  decoded: DecodedText,
+  lineEnds: LineEnds,
+): string {
+  if (head.length === 0) throw new GuideLogError('empty', 'The file is empty.');
+  const text = lineEnds.push(decoded.push(head));
+  // eslint flags control characters in a pattern: here they are what is looked for, so they are counted by code.
+  let controls = 0;
+  for (let at = 0; at < text.length; at++) if (isControl(text.charCodeAt(at))) controls++;
+  if (controls * CHARACTERS_PER_CONTROL > text.length) {
+    throw new GuideLogError('binary', 'The file is not text: it holds binary data.');
+  }
+  if (isWholeFile && text.trim() === '') {
+    throw new GuideLogError('empty', 'The file has nothing but blank lines.');
+  }
+  return text;
+}
+
+/** How the file is written and which column is what, from its first whole lines. */
+export function understandHead(
+  headText: string,
+  isWholeFile: boolean,
+  map: ColumnMap,
+): { dialect: Dialect; plan: ColumnPlan } {
+  const lastEnd = headText.lastIndexOf('\n');
+  const lines = isWholeFile || lastEnd === -1 ? headText : headText.slice(0, lastEnd + 1);
+  const dialect = sniffDialect(lines, map);
+  return { dialect, plan: planColumns(dialect, map) };
+}
+
+/** Controls that no text has: tab, line ends, form feed and the old end-of-file sign are allowed. */
+function isControl(code: number): boolean {
+  return code < 32 && code !== 9 && code !== 10 && code !== 12 && code !== 13 && code !== 26;
+}
