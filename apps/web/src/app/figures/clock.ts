@@ -34,7 +34,7 @@ export function nightDatesText(date: string): string {
   const morning = new Date(evening.getTime() + 86_400_000);
   return format('UTC', { day: 'numeric', month: 'long', year: 'numeric' })
     .formatRange(evening, morning)
-    .replace(/\s–\s/g, ' – ');
+    .replace(/(\d)\s*–\s*(\d)/, '$1–$2');
 }
 
 /** `28 Nov 2026`. */
