@@ -8,14 +8,14 @@ export async function up(knex: Knex): Promise<void> {
       mount jsonb NOT NULL,
       site jsonb NOT NULL,
       version integer NOT NULL DEFAULT 1,
-      created_at timestamptz NOT NULL DEFAULT now());
+      created_at timestamptz(3) NOT NULL DEFAULT now());
 
     CREATE TABLE rig_members (
       rig_id uuid NOT NULL REFERENCES rigs ON DELETE CASCADE,
       account_id uuid NOT NULL REFERENCES accounts ON DELETE CASCADE,
       role text NOT NULL
         CONSTRAINT rig_members_role_known CHECK (role IN ('owner', 'operator', 'advisor')),
-      created_at timestamptz NOT NULL DEFAULT now(),
+      created_at timestamptz(3) NOT NULL DEFAULT now(),
       CONSTRAINT rig_members_once PRIMARY KEY (rig_id, account_id));
     CREATE INDEX rig_members_account ON rig_members (account_id);
 
@@ -30,7 +30,7 @@ export async function up(knex: Knex): Promise<void> {
       sub_seconds double precision NOT NULL,
       keep_aspect double precision NOT NULL,
       version integer NOT NULL DEFAULT 1,
-      created_at timestamptz NOT NULL DEFAULT now());
+      created_at timestamptz(3) NOT NULL DEFAULT now());
     CREATE INDEX setups_of_rig ON setups (rig_id, created_at);
 
     CREATE TABLE column_maps (
@@ -39,7 +39,7 @@ export async function up(knex: Knex): Promise<void> {
       name text NOT NULL,
       header_cells jsonb NOT NULL,
       map jsonb NOT NULL,
-      created_at timestamptz NOT NULL DEFAULT now());
+      created_at timestamptz(3) NOT NULL DEFAULT now());
     CREATE INDEX column_maps_of_rig ON column_maps (rig_id, created_at)`);
 }
 

@@ -22,10 +22,9 @@ export async function up(knex: Knex): Promise<void> {
       line_count integer,
       frame_count integer,
       refused_count integer,
-      night_dates jsonb NOT NULL DEFAULT '[]',
       document jsonb,
       analysis_version text,
-      created_at timestamptz NOT NULL DEFAULT now(),
+      created_at timestamptz(3) NOT NULL DEFAULT now(),
       CONSTRAINT imports_failed_says_why CHECK ((state = 'failed') = (error IS NOT NULL)),
       CONSTRAINT imports_file_once UNIQUE (rig_id, sha256));
     CREATE INDEX imports_of_rig ON imports (rig_id, created_at DESC);

@@ -1,8 +1,4 @@
-import {
-  type AnalysisDocument,
-  type ColumnMap,
-  type IMPORT_STATES,
-} from '@stillpier/contract';
+import { type AnalysisDocument, type ColumnMap, type IMPORT_STATES } from '@stillpier/contract';
 import { type QueryBuilder } from 'objection';
 import { BaseModel } from '../database/base-model';
 

@@ -8,7 +8,12 @@ describe('nightDateOf', () => {
     ['the hours after midnight', '2026-03-15T08:00:00Z', 'America/Toronto', '2026-03-14'],
     ['the last second before noon', '2026-03-15T15:59:59Z', 'America/Toronto', '2026-03-14'],
     ['noon itself', '2026-03-15T16:00:00Z', 'America/Toronto', '2026-03-15'],
-    ['noon on the day of the clock change', '2026-03-08T16:00:00Z', 'America/Toronto', '2026-03-08'],
+    [
+      'noon on the day of the clock change',
+      '2026-03-08T16:00:00Z',
+      'America/Toronto',
+      '2026-03-08',
+    ],
     ['a site east of Greenwich', '2026-03-14T12:30:00Z', 'Australia/Perth', '2026-03-14'],
   ])('takes %s for the right night', (_what, instant, zone, night) => {
     expect(nightDateOf(new Date(instant), zone)).toBe(night);

@@ -49,5 +49,9 @@ export async function moveRunsToTheirNights(
     return night === from ? [] : [{ id, from, night }];
   });
   for (const { id, night } of moved) await RunModel.query(trx).findById(id).patch({ night });
-  await recomputeNights(trx, rigId, moved.flatMap(({ from, night }) => [from, night]));
+  await recomputeNights(
+    trx,
+    rigId,
+    moved.flatMap(({ from, night }) => [from, night]),
+  );
 }

@@ -1,9 +1,4 @@
-import {
-  createSetupSchema,
-  setupPaths,
-  setupSchema,
-  updateSetupSchema,
-} from '@stillpier/contract';
+import { createSetupSchema, setupPaths, setupSchema, updateSetupSchema } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
 import { readRequest } from '../http/read-request';
@@ -28,7 +23,10 @@ export function setupRoutes(setups: SetupService): Router {
     const { rigId } = readRequest(rigParametersSchema, req.params);
     const body = readRequest(createSetupSchema, req.body);
     const setup = await setups.create(account.id, rigId, body);
-    res.status(201).location(setupPaths.one(rigId, setup.id)).set('ETag', versionTag(setup.version));
+    res
+      .status(201)
+      .location(setupPaths.one(rigId, setup.id))
+      .set('ETag', versionTag(setup.version));
     res.json(setupSchema.parse(setup));
   });
 

@@ -10,6 +10,10 @@ export const importOptionsSchema = z.strictObject({
 });
 export type ImportOptions = z.infer<typeof importOptionsSchema>;
 
+/** Read the kept original again; what is not given stays as it was. */
+export const retryImportSchema = importOptionsSchema.partial();
+export type RetryImport = z.infer<typeof retryImportSchema>;
+
 export const logImportSchema = z
   .strictObject({
     id: z.uuid(),
