@@ -1,14 +1,15 @@
 import { HttpClient, httpResource, type HttpResourceRef } from '@angular/common/http';
 import { inject, Injectable, type Signal } from '@angular/core';
-import { type CreateRig, pageOf, type Rig, rigPaths, rigSchema } from '@stillpier/contract';
+import { type CreateRig, type Rig, rigPaths, rigSchema } from '@stillpier/contract';
 import { firstValueFrom } from 'rxjs';
+import * as z from 'zod';
 import { SessionApi } from './session-api';
 
 // The form of every file here: one resource a file, paths and schemas from the contract, each answer parsed on arrival.
 // Reads are resources (httpResource is experimental in Angular 21 and stays inside this folder), writes are promises
 // that reject with ProblemError.
 
-const rigPageSchema = pageOf(rigSchema);
+const rigListSchema = z.array(rigSchema);
 
 @Injectable({ providedIn: 'root' })
 export class RigsApi {
@@ -17,8 +18,8 @@ export class RigsApi {
 
   /** The rigs of the account: shared by the rig picker and the pages, so reload it after a change. */
   readonly list: HttpResourceRef<Rig[] | undefined> = httpResource(
-    () => (this.session.account() ? { url: rigPaths.all, params: { limit: 1000 } } : undefined),
-    { parse: (body) => rigPageSchema.parse(body).items },
+    () => (this.session.account() ? rigPaths.all : undefined),
+    { parse: (body) => rigListSchema.parse(body) },
   );
 
   one(rigId: Signal<string>): HttpResourceRef<Rig | undefined> {

@@ -14,12 +14,12 @@ import { type FormSubmission } from './form-submission';
   template: `
     <div role="alert">
       @if (submission().message(); as text) {
-        <p>{{ text }}</p>
+        <p class="refusal">{{ text }}</p>
       }
     </div>
     <ng-content />
   `,
-  styleUrl: './form-message.scss',
+  styles: ':host { display: block; }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FormMessage {

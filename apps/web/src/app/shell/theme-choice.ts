@@ -1,7 +1,11 @@
 import { computed, DestroyRef, DOCUMENT, inject, Injectable, signal } from '@angular/core';
 
-export const THEMES = ['day', 'night', 'red'] as const;
-export type Theme = (typeof THEMES)[number];
+export const THEME_NAMES = [
+  { id: 'day', name: 'Day' },
+  { id: 'night', name: 'Night' },
+  { id: 'red', name: 'Red light' },
+] as const;
+export type Theme = (typeof THEME_NAMES)[number]['id'];
 
 /** Read by theme-boot.js as well. */
 const STORAGE_KEY = 'stillpier-theme';
@@ -44,7 +48,7 @@ export class ThemeChoice {
   private stored(): Theme | null {
     try {
       const name = this.window?.localStorage.getItem(STORAGE_KEY);
-      return THEMES.find((theme) => theme === name) ?? null;
+      return THEME_NAMES.find(({ id }) => id === name)?.id ?? null;
     } catch {
       return null; // storage is off
     }
