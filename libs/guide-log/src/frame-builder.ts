@@ -1,6 +1,6 @@
-import { type ColumnMap, type ColumnRole, type TimeUnit } from './column-map';
+import { COLUMN_ROLES, type ColumnMap, type ColumnRole, type TimeUnit } from './column-map';
 import { type ColumnPlan } from './column-plan';
-import { correctionWithSign, pierSideCode } from './direction';
+import { pierSideCode } from './direction';
 import { GrowingCodes, GrowingNumbers } from './growing-arrays';
 import { type LogFrames } from './guide-log';
 import { NameColumn } from './name-column';
@@ -11,6 +11,9 @@ import { readIsoTime } from './time-cell';
 
 /** Hours of hour angle that pass in one second: 1.00273790935 sidereal days a day (IAU 1982, Aoki et al.). */
 const HOUR_ANGLE_HOURS_PER_SECOND = 1.002_737_909_35 / 3600;
+
+/** Warnings of times that go back; a log with more of them has another trouble. */
+const LISTED_RESTARTS = 20;
 
 const TIME_WORDS: Readonly<Record<TimeUnit, string>> = {
   seconds: 'a number',
@@ -23,7 +26,8 @@ const TIME_WORDS: Readonly<Record<TimeUnit, string>> = {
 
 /** Rows of cells to columns of numbers; no row is kept. */
 export class FrameBuilder {
-  readonly #indexOf: ReadonlyMap<ColumnRole, number>;
+  /** 0-based column by role; -1 for a role that the log does not have. */
+  readonly #at: Readonly<Record<ColumnRole, number>>;
   readonly #timeUnit: TimeUnit;
   readonly #axis: TimeAxis;
   readonly #times = new GrowingNumbers();
@@ -33,7 +37,6 @@ export class FrameBuilder {
   readonly #targets = new NameColumn();
   readonly #pierSides = new GrowingCodes();
   readonly #restarts: string[] = [];
-  #section = 1;
   #lastRun = '';
   #lastTarget = '';
   #startEpochSeconds: number | null = null;
@@ -45,7 +48,7 @@ export class FrameBuilder {
     decimal: '.' | ',',
   ) {
     const decimalCode = decimal.charCodeAt(0);
-    this.#indexOf = new Map(plan.columns.map((column) => [column.role, column.index]));
+    this.#at = indexByRole(plan);
     this.#timeUnit = timeUnitOf(plan);
     this.#axis = new TimeAxis(this.#timeUnit, decimalCode);
     this.#numbers = new NumberColumns(plan, decimalCode);
@@ -63,26 +66,24 @@ export class FrameBuilder {
    * @returns Why the row is refused, or null when it was taken.
    */
   add(cells: readonly string[], line: number, followsHeader: boolean): string | null {
-    const timeCell = this.#cell(cells, 'time');
+    const timeCell = cells[this.#at.time] ?? '';
     const rawSeconds = this.#axis.read(timeCell);
     if (Number.isNaN(rawSeconds)) {
       return timeCell.trim() === ''
         ? 'time is blank'
         : `time is not ${TIME_WORDS[this.#timeUnit]}: ${quoted(timeCell)}`;
     }
-    const fault = this.#numbers.read(cells) ?? this.#applyDirections(cells);
+    const fault = this.#numbers.read(cells);
     if (fault !== null) return fault;
 
-    const run = this.#cell(cells, 'run');
-    const target = this.#cell(cells, 'target');
-    const isNewRun = followsHeader || run !== this.#lastRun || target !== this.#lastTarget;
-    const step = this.#axis.step(rawSeconds, isNewRun);
-    const secondsBack = Number(this.#axis.secondsBack(rawSeconds).toFixed(3));
-    if (step === 'backward') return `time goes back by ${secondsBack} s`;
-    if (step === 'restart' && run === this.#lastRun && target === this.#lastTarget) {
-      this.#section++;
+    const run = this.#cell(cells, this.#at.run);
+    const target = this.#cell(cells, this.#at.target);
+    const changes = run !== this.#lastRun || target !== this.#lastTarget;
+    const step = this.#axis.step(rawSeconds, changes || followsHeader);
+    if (step === 'backward') return `time goes back by ${this.#secondsBack(rawSeconds)} s`;
+    if (step === 'restart' && !changes && this.#restarts.length < LISTED_RESTARTS) {
       this.#restarts.push(
-        `In line ${line} the time goes back by ${secondsBack} s: a new run begins.`,
+        `In line ${line} the time goes back by ${this.#secondsBack(rawSeconds)} s: a new run begins there.`,
       );
     }
     this.#lastRun = run;
@@ -98,7 +99,7 @@ export class FrameBuilder {
     for (let at = 0; at < timeSeconds.length; at++)
       timeSeconds[at] = (timeSeconds[at] ?? 0) - first;
     const { map } = this;
-    const has = (role: ColumnRole) => this.#indexOf.has(role);
+    const has = (role: ColumnRole) => this.#at[role] >= 0;
     return {
       count: this.#count,
       timeSeconds,
@@ -114,8 +115,8 @@ export class FrameBuilder {
       snr: this.#numbers.finish('snr'),
       brightness: this.#numbers.finish('brightness'),
       state: has('state') ? this.#states.finish() : null,
-      run: has('run') || this.#section > 1 ? this.#runs.finish() : null,
-      runNames: has('run') || this.#section > 1 ? this.#runs.names : [],
+      run: has('run') ? this.#runs.finish() : null,
+      runNames: this.#runs.names,
       target: has('target') ? this.#targets.finish() : null,
       targetNames: this.#targets.names,
       declinationDegrees:
@@ -137,7 +138,7 @@ export class FrameBuilder {
       ...(lacksZone
         ? ['The times carry no time zone, so that the instant of the start is not known.']
         : []),
-      ...this.#restarts.slice(0, 20),
+      ...this.#restarts,
       ...this.#states.warnings(),
     ];
   }
@@ -145,18 +146,17 @@ export class FrameBuilder {
   #append(cells: readonly string[], run: string, target: string): void {
     if (this.#count++ === 0) this.#startEpochSeconds = this.#startOf(cells);
     this.#numbers.append();
-    if (this.#indexOf.has('state')) this.#states.append(this.#cell(cells, 'state'));
-    const section = String(this.#section);
-    this.#runs.append(this.#section === 1 ? run : run === '' ? section : `${run} (${section})`);
-    this.#targets.append(target);
-    if (this.#indexOf.has('pierSide')) {
-      this.#pierSides.append(pierSideCode(this.#cell(cells, 'pierSide')));
+    if (this.#at.run >= 0) this.#runs.append(run);
+    if (this.#at.target >= 0) this.#targets.append(target);
+    if (this.#at.state >= 0) this.#states.append(this.#cell(cells, this.#at.state));
+    if (this.#at.pierSide >= 0) {
+      this.#pierSides.append(pierSideCode(this.#cell(cells, this.#at.pierSide)));
     }
   }
 
   /** Instant of the first frame: the log's own word, else the map's, else not known. */
   #startOf(cells: readonly string[]): number | null {
-    const timeCell = this.#cell(cells, 'time');
+    const timeCell = cells[this.#at.time] ?? '';
     if (this.#timeUnit.startsWith('epoch')) return this.#axis.read(timeCell);
     const startCell = this.plan.startColumn && cells[this.plan.startColumn.index];
     for (const cell of [timeCell, startCell, this.map.startTime]) {
@@ -166,36 +166,27 @@ export class FrameBuilder {
     return null;
   }
 
-  #applyDirections(cells: readonly string[]): string | null {
-    return (
-      this.#applyDirection(cells, 'raDirection', 'raCorrection') ??
-      this.#applyDirection(cells, 'decDirection', 'decCorrection')
-    );
+  /** A cell of a column that the log may not have. */
+  #cell(cells: readonly string[], at: number): string {
+    return at < 0 ? '' : (cells[at] ?? '');
   }
 
-  #applyDirection(
-    cells: readonly string[],
-    directionRole: 'raDirection' | 'decDirection',
-    correctionRole: 'raCorrection' | 'decCorrection',
-  ): string | null {
-    if (!this.#indexOf.has(directionRole) || !this.#indexOf.has(correctionRole)) return null;
-    const cell = this.#cell(cells, directionRole);
-    const correction = correctionWithSign(this.#numbers.value(correctionRole), cell);
-    if (correction === null) {
-      return `${directionRole === 'raDirection' ? 'RA' : 'Dec'} direction is not known: ${quoted(cell)}`;
-    }
-    this.#numbers.setValue(correctionRole, correction);
-    return null;
-  }
-
-  #cell(cells: readonly string[], role: ColumnRole): string {
-    const index = this.#indexOf.get(role);
-    return index === undefined ? '' : (cells[index] ?? '');
+  #secondsBack(rawSeconds: number): number {
+    return Number(this.#axis.secondsBack(rawSeconds).toFixed(3));
   }
 
   #unit(role: ColumnRole) {
     return this.plan.columns.find((column) => column.role === role)?.unit;
   }
+}
+
+function indexByRole(plan: ColumnPlan): Record<ColumnRole, number> {
+  const index = (role: ColumnRole) =>
+    plan.columns.find((column) => column.role === role)?.index ?? -1;
+  return Object.fromEntries(COLUMN_ROLES.map((role) => [role, index(role)])) as Record<
+    ColumnRole,
+    number
+  >;
 }
 
 function timeUnitOf(plan: ColumnPlan): TimeUnit {

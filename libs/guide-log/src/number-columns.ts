@@ -1,5 +1,6 @@
 import { type ColumnRole } from './column-map';
 import { type ColumnPlan, ROLE_NAMES } from './column-plan';
+import { correctionWithSign } from './direction';
 import { GrowingNumbers } from './growing-arrays';
 import { isMissingCell, readNumber } from './number-cell';
 
@@ -21,9 +22,17 @@ interface NumberColumn {
   readonly values: GrowingNumbers;
 }
 
+interface DirectionColumn {
+  readonly role: 'raDirection' | 'decDirection';
+  readonly index: number;
+  /** Place of the correction that it gives a sign, in the row. */
+  readonly correctionAt: number;
+}
+
 /** The columns of plain numbers: a row is read whole first and appended only when the line is not refused. */
 export class NumberColumns {
   readonly #columns: readonly NumberColumn[];
+  readonly #directions: readonly DirectionColumn[];
   /** The row that was read last. */
   readonly #row: Float64Array;
 
@@ -35,10 +44,20 @@ export class NumberColumns {
       const planned = plan.columns.find((column) => column.role === role);
       return planned ? [{ role, index: planned.index, values: new GrowingNumbers() }] : [];
     });
+    this.#directions = (
+      [
+        ['raDirection', 'raCorrection'],
+        ['decDirection', 'decCorrection'],
+      ] as const
+    ).flatMap(([role, corrected]): DirectionColumn[] => {
+      const planned = plan.columns.find((column) => column.role === role);
+      const correctionAt = this.#columns.findIndex((column) => column.role === corrected);
+      return planned && correctionAt >= 0 ? [{ role, index: planned.index, correctionAt }] : [];
+    });
     this.#row = new Float64Array(this.#columns.length);
   }
 
-  /** Reads a row; the name and text of a cell that is no number, or null when all is well. */
+  /** Reads a row, corrections with their signs. @returns Why it cannot be read, or null. */
   read(cells: readonly string[]): string | null {
     for (let at = 0; at < this.#columns.length; at++) {
       const column = this.#columns[at];
@@ -50,16 +69,7 @@ export class NumberColumns {
       }
       this.#row[at] = number;
     }
-    return null;
-  }
-
-  /** The row's number of a role; NaN where it is missing. */
-  value(role: NumberRole): number {
-    return this.#row[this.#at(role)] ?? NaN;
-  }
-
-  setValue(role: NumberRole, number: number): void {
-    this.#row[this.#at(role)] = number;
+    return this.#directions.length === 0 ? null : this.#applyDirections(cells);
   }
 
   append(): void {
@@ -70,11 +80,17 @@ export class NumberColumns {
 
   /** The values of a role, or null when the log has no such column. */
   finish(role: NumberRole): Float64Array | null {
-    return this.#columns[this.#at(role)]?.values.finish() ?? null;
+    return this.#columns.find((column) => column.role === role)?.values.finish() ?? null;
   }
 
-  #at(role: NumberRole): number {
-    return this.#columns.findIndex((column) => column.role === role);
+  #applyDirections(cells: readonly string[]): string | null {
+    for (const { role, index, correctionAt } of this.#directions) {
+      const cell = cells[index] ?? '';
+      const correction = correctionWithSign(this.#row[correctionAt] ?? NaN, cell);
+      if (correction === null) return `${ROLE_NAMES[role]} is not known: ${quoted(cell)}`;
+      this.#row[correctionAt] = correction;
+    }
+    return null;
   }
 }
 

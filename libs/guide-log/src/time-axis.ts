@@ -1,5 +1,5 @@
 import { type TimeUnit } from './column-map';
-import { timeReader } from './time-cell';
+import { timeReader } from './time-reader';
 
 const SECONDS_PER_DAY = 86_400;
 /** Further back than this inside a run is a clock that passed midnight or was set, not a line out of place. */

@@ -1,6 +1,3 @@
-import { type TimeUnit } from './column-map';
-import { readNumber } from './number-cell';
-
 const CLOCK = /^(\d{1,2}):(\d{2})(?::(\d{2})(?:[.,](\d+))?)?$/;
 const ISO = /^(\d{4})[-/](\d{2})[-/](\d{2})[T ](\S+?)\s*(Z|[+-]\d{2}:?(?:\d{2})?)?$/i;
 
@@ -8,22 +5,6 @@ export interface IsoTime {
   /** Since 1970-01-01T00:00Z; without a zone, as if the time were in UTC. */
   readonly epochSeconds: number;
   readonly hasZone: boolean;
-}
-
-/** A time cell as seconds on the axis of its unit, or NaN: `seconds` and `epoch seconds` are as written. */
-export function timeReader(unit: TimeUnit, decimalCode: number): (cell: string) => number {
-  switch (unit) {
-    case 'seconds':
-    case 'epoch seconds':
-      return (cell) => readNumber(cell, decimalCode);
-    case 'milliseconds':
-    case 'epoch milliseconds':
-      return (cell) => readNumber(cell, decimalCode) / 1000;
-    case 'iso':
-      return (cell) => readIsoTime(cell)?.epochSeconds ?? NaN;
-    case 'clock':
-      return (cell) => readClock(cell.trim());
-  }
 }
 
 /**
@@ -46,8 +27,8 @@ export function readIsoTime(cell: string): IsoTime | null {
   };
 }
 
-/** Seconds since midnight; 60 in the seconds is a leap second. */
-function readClock(text: string): number {
+/** Seconds since midnight of `21:40:07.25`, or NaN; 60 in the seconds is a leap second. */
+export function readClock(text: string): number {
   const match = CLOCK.exec(text);
   if (!match) return NaN;
   const [, hour, minute, second = '0', fraction = '0'] = match;
