@@ -1,0 +1,147 @@
+import { at } from '../statistics/at';
+import { localFalseAlarmProbability } from './false-alarm';
+import { type NoiseLevel, noiseLevel } from './noise-level';
+import { type Periodogram } from './periodogram';
+import { amplitudeOf, type SharpLine, sharpenLine, sineAt } from './sharpen-line';
+
+/** A line that stands above the noise around it. */
+export interface FoundLine {
+  readonly periodSeconds: number;
+  /** Half the peak-to-peak, in the unit of the values. */
+  readonly amplitude: number;
+  readonly falseAlarmProbability: number;
+}
+
+export const LARGEST_FALSE_ALARM = 0.001;
+export const MOST_LINES = 12;
+/** A line must turn at least so often in the run: slower motion cannot be told from drift. */
+const FEWEST_TURNS = 2;
+/** Strong lines hide weak ones: search, take off what was found, search again, at most so often. */
+const ROUNDS = 6;
+/** A line between two bins looks weaker on the grid than it is, by less than this in power. */
+const BETWEEN_BINS = 1.25;
+/** Below this part of the highest power there is only the rounding of the arithmetic. */
+const ROUNDING = 1e-12;
+
+/**
+ * The lines in a series: local maxima of its spectrum whose false-alarm probability against the noise around them is
+ * below 0.001, one per resolution width, at most 12, strongest first. Lines found are fitted on the exact times, each
+ * with its frequency free while the others are held, taken off, and the rest is searched again. O(n log n).
+ *
+ * @param values n values at the periodogram's times.
+ * @param timeSeconds The times that the periodogram was built for.
+ * @param squaredAmplitudes `spectrum.squaredAmplitudes(values)`.
+ */
+export function findLines(
+  spectrum: Periodogram,
+  timeSeconds: Float64Array,
+  values: Float64Array,
+  squaredAmplitudes: Float64Array,
+): FoundLine[] {
+  const lines: SharpLine[] = [];
+  const left = values.slice();
+  let power = squaredAmplitudes;
+  const floor = ROUNDING * power.reduce((most, value) => Math.max(most, value), 0);
+  let noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
+  for (let round = 0; round < ROUNDS; round++) {
+    const fresh = candidates(spectrum, power, noise, lines);
+    if (fresh.length === 0) break;
+    for (const frequency of fresh) {
+      const line = sharpenLine(timeSeconds, left, frequency, spectrum.resolutionHz / 2);
+      add(left, timeSeconds, line, -1);
+      lines.push(line);
+    }
+    sharpenTogether(spectrum, timeSeconds, left, lines);
+    power = spectrum.squaredAmplitudes(left);
+    noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
+  }
+  return lines
+    .map((line) => ({
+      periodSeconds: 1 / line.frequency,
+      amplitude: amplitudeOf(line),
+      falseAlarmProbability: falseAlarm(
+        spectrum,
+        noise,
+        line.frequency / spectrum.stepHz,
+        amplitudeOf(line) ** 2,
+      ),
+    }))
+    .filter((line) => line.falseAlarmProbability < LARGEST_FALSE_ALARM)
+    .sort((a, b) => b.amplitude - a.amplitude)
+    .filter((line, i, all) => all.slice(0, i).every((other) => apart(other, line, spectrum)))
+    .slice(0, MOST_LINES);
+}
+
+/** Whether two lines are more than a resolution width from each other: sharpening may have moved them together. */
+function apart(a: FoundLine, b: FoundLine, { resolutionHz }: Periodogram): boolean {
+  return Math.abs(1 / a.periodSeconds - 1 / b.periodSeconds) > resolutionHz;
+}
+
+function firstBin({ resolutionHz, stepHz }: Periodogram): number {
+  return Math.max(1, Math.ceil((FEWEST_TURNS * resolutionHz) / stepHz));
+}
+
+function falseAlarm(
+  { trials }: Periodogram,
+  { level, bins }: NoiseLevel,
+  bin: number,
+  power: number,
+): number {
+  const nearest = Math.max(0, Math.min(level.length - 1, Math.round(bin)));
+  return localFalseAlarmProbability(power / at(level, nearest), at(bins, nearest), trials);
+}
+
+/** Frequencies of new local maxima that may be lines, strongest first, apart from each other and from known lines. */
+function candidates(
+  spectrum: Periodogram,
+  power: Float64Array,
+  noise: NoiseLevel,
+  known: readonly SharpLine[],
+): number[] {
+  const { stepHz, resolutionHz, sidelobes } = spectrum;
+  const maxima: { frequency: number; power: number }[] = [];
+  for (let k = firstBin(spectrum); k < power.length - 1; k++) {
+    const here = at(power, k);
+    if (here < at(power, k - 1) || here < at(power, k + 1)) continue;
+    if (falseAlarm(spectrum, noise, k, BETWEEN_BINS * here) >= LARGEST_FALSE_ALARM) continue;
+    maxima.push({ frequency: (k + offBin(power, k)) * stepHz, power: here });
+  }
+  maxima.sort((a, b) => b.power - a.power);
+  const fresh: number[] = [];
+  const believed = sidelobes * (maxima[0]?.power ?? 0);
+  for (const { frequency, power: height } of maxima) {
+    const taken = [...known.map((line) => line.frequency), ...fresh];
+    if (taken.length >= MOST_LINES || height < believed) break;
+    if (taken.every((other) => Math.abs(other - frequency) > resolutionHz)) fresh.push(frequency);
+  }
+  return fresh;
+}
+
+/** Top of the parabola through three bins: near enough to start from. */
+function offBin(power: Float64Array, k: number): number {
+  const bend = at(power, k - 1) - 2 * at(power, k) + at(power, k + 1);
+  return bend === 0 ? 0 : (at(power, k - 1) - at(power, k + 1)) / (2 * bend);
+}
+
+/** Fits each line again with the others taken off, the strongest first; changes `lines` and `left`. */
+function sharpenTogether(
+  { resolutionHz }: Periodogram,
+  timeSeconds: Float64Array,
+  left: Float64Array,
+  lines: SharpLine[],
+): void {
+  if (lines.length < 2) return;
+  lines.sort((a, b) => amplitudeOf(b) - amplitudeOf(a));
+  lines.forEach((line, i) => {
+    add(left, timeSeconds, line, 1);
+    const sharper = sharpenLine(timeSeconds, left, line.frequency, resolutionHz / 4);
+    add(left, timeSeconds, sharper, -1);
+    lines[i] = sharper;
+  });
+}
+
+function add(values: Float64Array, timeSeconds: Float64Array, line: SharpLine, sign: number): void {
+  for (let i = 0; i < values.length; i++) {
+    values[i] = at(values, i) + sign * sineAt(line, at(timeSeconds, i));
+  }
+}
