@@ -1,0 +1,153 @@
+import { robustSigma } from '../statistics/robust-sigma';
+import { innovationLines } from './innovation-lines';
+import { likeliestWalk } from './likeliest-walk';
+import { type FittedLine, lineColumns, lineFrom, newLine } from './motion-line';
+import { type LevelFrames, whitenedLeastSquares, type WhitenedFit } from './whitened-least-squares';
+
+export interface MotionFitInput {
+  readonly frames: LevelFrames;
+  /** Error or uncorrected motion, arcsec; NaN only where a frame is not used. */
+  readonly series: Float64Array;
+  /** What else the series may hold: summed corrections, in any unit. */
+  readonly commands: readonly Float64Array[];
+  /** Lines that are known already, to begin with; none: the fit finds all itself. */
+  readonly startLines: readonly FittedLine[];
+}
+
+export interface MotionFit {
+  /** As given, less the frames that were bumps; a bump that stays is a new start of the level. */
+  readonly frames: LevelFrames;
+  readonly walkPerSecond: number;
+  /** White noise of one frame, arcsec. */
+  readonly noise: number;
+  /** One a command, and their covariance, row after row. */
+  readonly coefficients: Float64Array;
+  readonly covariance: Float64Array;
+  readonly driftPerSecond: number;
+  readonly driftStandardError: number;
+  /** Strongest first. */
+  readonly lines: readonly FittedLine[];
+  readonly innovations: Float64Array;
+  readonly count: number;
+}
+
+const MOST_PASSES = 8;
+const MOST_LINES = 12;
+/** Two lines closer than this part of the resolution 1/span are one. */
+const ONE_LINE = 0.8;
+/** A frequency that moves less than this part of the resolution has settled. */
+const SETTLED = 0.02;
+const BUMP_SIGMAS = 5;
+/** So many bumps in a row are no bump but a step: the level starts anew. */
+const STEP_FRAMES = 4;
+
+/**
+ * One-step prediction-error fit of the motion of one axis (SCIENCE 4):
+ *
+ *     e[n] = Σ sᵢ·cᵢ[n] + drift·t + significant lines + wandering level + white noise,
+ *
+ * which in first differences reads Δe = s·Δc + lines + (1 − θB)ε. The lines are found in the innovations, strongest first,
+ * and their periods refined together with all else; the wandering follows by likelihood. A correction is a function of
+ * the errors before it, the innovation is not: so the fit is unbiased inside a closed loop, where regressing the motion
+ * on the correction is not (REFERENCE 11). O(n log n).
+ *
+ * @see L. Ljung, System Identification: Theory for the User, 2nd ed. 1999, ch. 8 and sec. 13.4.
+ */
+export function fitMotion(input: MotionFitInput): MotionFit {
+  const { series, commands } = input;
+  const span = (input.frames.timeSeconds.at(-1) ?? 0) - (input.frames.timeSeconds[0] ?? 0);
+  let frames = input.frames;
+  let lines: readonly FittedLine[] = input.startLines;
+  for (let pass = 1; ; pass++) {
+    const { columns, places } = designMatrix(frames, commands, lines);
+    const walkPerSecond = likeliestWalk(frames, columns, series);
+    const fit = whitenedLeastSquares(frames, walkPerSecond, columns, series);
+    const refined = lines.map((line, i) => lineFrom(line, fit, places[i] ?? 0, span));
+    const moved = refined.some(
+      (line, i) => Math.abs(line.frequency - (lines[i]?.frequency ?? 0)) * span > SETTLED,
+    );
+    const unrefined = lines.some((line) => line.amplitude === 0);
+    const found = pass < MOST_PASSES - 2 ? newLines(frames, fit, refined, span) : [];
+    lines = [...refined, ...found];
+    const last = pass >= MOST_PASSES || (found.length === 0 && !moved && !unrefined && pass > 1);
+    if (last) return described(frames, walkPerSecond, fit, commands.length, lines);
+    if (pass > 1) frames = withoutBumps(frames, fit.innovations);
+  }
+}
+
+/** Commands, drift, then the lines; `places` tells where each line's columns begin. */
+function designMatrix(
+  frames: LevelFrames,
+  commands: readonly Float64Array[],
+  lines: readonly FittedLine[],
+) {
+  const columns = [...commands, frames.timeSeconds];
+  const places = lines.map((line) => {
+    const place = columns.length;
+    columns.push(...lineColumns(frames.timeSeconds, line));
+    return place;
+  });
+  return { columns, places };
+}
+
+function newLines(
+  frames: LevelFrames,
+  fit: WhitenedFit,
+  known: readonly FittedLine[],
+  span: number,
+): FittedLine[] {
+  const isNew = (frequency: number) =>
+    known.every((line) => Math.abs(line.frequency - frequency) * span > ONE_LINE);
+  return innovationLines(frames, fit.innovations)
+    .filter(isNew)
+    .slice(0, MOST_LINES - known.length)
+    .map(newLine);
+}
+
+/** Leaves out frames whose innovation no noise explains, so that a gust does not pass for wandering. */
+function withoutBumps(frames: LevelFrames, innovations: Float64Array): LevelFrames {
+  const limit = BUMP_SIGMAS * robustSigma(innovations.filter((value) => value !== 0));
+  const used = Uint8Array.from(frames.used);
+  const restarts = new Set(frames.restartFrames);
+  let inARow = 0;
+  innovations.forEach((innovation, n) => {
+    inARow = Math.abs(innovation) > limit ? inARow + 1 : 0;
+    if (inARow === 0) return;
+    used[n] = 0;
+    if (inARow === STEP_FRAMES) {
+      used.fill(1, n - STEP_FRAMES + 1, n + 1);
+      restarts.add(n - STEP_FRAMES + 1);
+      inARow = 0;
+    }
+  });
+  used.forEach((value, n) => {
+    if (frames.used[n] === 0 && value === 1) used[n] = 0;
+  });
+  return { ...frames, used, restartFrames: [...restarts].sort((a, b) => a - b) };
+}
+
+function described(
+  frames: LevelFrames,
+  walkPerSecond: number,
+  fit: WhitenedFit,
+  commands: number,
+  lines: readonly FittedLine[],
+): MotionFit {
+  const size = fit.coefficients.length;
+  const covariance = new Float64Array(commands * commands);
+  for (let i = 0; i < commands; i++) {
+    covariance.set(fit.covariance.subarray(i * size, i * size + commands), i * commands);
+  }
+  return {
+    frames,
+    walkPerSecond,
+    noise: fit.noise,
+    coefficients: fit.coefficients.slice(0, commands),
+    covariance,
+    driftPerSecond: fit.coefficients[commands] ?? 0,
+    driftStandardError: Math.sqrt(fit.covariance[commands * size + commands] ?? 0),
+    lines: [...lines].sort((a, b) => b.amplitude - a.amplitude),
+    innovations: fit.innovations,
+    count: fit.count,
+  };
+}

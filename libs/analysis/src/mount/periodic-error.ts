@@ -1,0 +1,244 @@
+import { type PeriodicError } from '../analysis-document';
+import { type MotionFit } from './motion-fit';
+import { amplitudeError, type FittedLine, lineColumns } from './motion-line';
+import { likeliestWalk } from './likeliest-walk';
+import { addScaled, whitenedLeastSquares, type WhitenedFit } from './whitened-least-squares';
+
+/** Periodic error as fitted: on the sky, before the turn into axis angles. */
+export interface WormFit {
+  readonly periodSeconds: number;
+  readonly periodFrom: 'rig' | 'spectrum';
+  readonly turns: number;
+  /** Harmonics of the worm, the first first. */
+  readonly harmonics: readonly FittedLine[];
+  /** Significant lines that are no harmonic of the worm, strongest first. */
+  readonly otherLines: readonly FittedLine[];
+  readonly driftPerSecond: number;
+  readonly driftStandardError: number;
+  readonly walkPerSecond: number;
+  readonly noise: number;
+}
+
+export const FEWEST_TURNS = 2;
+const MOST_HARMONICS = 8;
+/** A worm whose period nobody told is looked for between these. */
+const SHORTEST_SECONDS = 60;
+const LONGEST_SECONDS = 1200;
+/** A harmonic must be sampled at least so often. */
+const FRAMES_A_PERIOD = 4;
+/** A line this close to T / k (relative), or closer than its own resolution, is the worm's. */
+const LABEL_WIDTH = 0.02;
+const PERIOD_REFINEMENTS = 4;
+const CURVE_POINTS = 1440;
+
+/**
+ * Periodic error of the RA drive: harmonics of the worm period fitted to the uncorrected motion together with drift and
+ * the other significant lines, over a wandering level that starts anew after every dither (`whitenedLeastSquares`:
+ * differenced, whitened data). The number of harmonics, 1 to 8, is that of the least Akaike criterion: it asks
+ * whether the next harmonic makes the curve better, which is what peak to peak and slope need. O(n).
+ *
+ * @param motion The fit of the uncorrected motion without corrections.
+ * @param wormSeconds The rig's period; null to take the strongest line between 60 and 1200 s and refine it.
+ * @returns The fit, or why there is none.
+ * @see H. Akaike, IEEE Trans. Automatic Control 19 (1974) 716.
+ */
+export function fitPeriodicError(
+  motion: MotionFit,
+  uncorrectedArcsec: Float64Array,
+  wormSeconds: number | null,
+): WormFit | { readonly why: string } {
+  const { timeSeconds, cadenceSeconds } = motion.frames;
+  const span = (timeSeconds.at(-1) ?? 0) - (timeSeconds[0] ?? 0) + cadenceSeconds;
+  const period = wormSeconds ?? strongestPeriod(motion.lines);
+  if (period === null) {
+    return {
+      why: 'The rig tells no worm period, and the uncorrected RA motion shows no clear line between 60 and 1200 s.',
+    };
+  }
+  const turns = span / period;
+  if (turns < FEWEST_TURNS) {
+    return {
+      why: `The run saw ${turns.toFixed(1)} turns of the worm; periodic error needs ${FEWEST_TURNS}.`,
+    };
+  }
+  const worm = new WormDesign(motion, uncorrectedArcsec, span);
+  const refined = wormSeconds ?? worm.refinedPeriod(period);
+  return {
+    ...worm.fit(refined),
+    periodSeconds: refined,
+    periodFrom: wormSeconds === null ? 'spectrum' : 'rig',
+    turns: span / refined,
+  };
+}
+
+function strongestPeriod(lines: readonly FittedLine[]): number | null {
+  const credible = lines.find(
+    ({ frequency }) => 1 / frequency >= SHORTEST_SECONDS && 1 / frequency <= LONGEST_SECONDS,
+  );
+  return credible === undefined ? null : 1 / credible.frequency;
+}
+
+class WormDesign {
+  constructor(
+    private readonly motion: MotionFit,
+    private readonly series: Float64Array,
+    private readonly span: number,
+  ) {}
+
+  /** Gauss and Newton's steps in the period, with the harmonics that it then has. */
+  refinedPeriod(start: number): number {
+    const { timeSeconds } = this.motion.frames;
+    let frequency = 1 / start;
+    for (let step = 0; step < PERIOD_REFINEMENTS; step++) {
+      const { harmonics, walkPerSecond } = this.fit(1 / frequency);
+      const byFrequency = new Float64Array(timeSeconds.length);
+      harmonics.forEach((line, k) => {
+        const derivative = lineColumns(timeSeconds, line)[2];
+        if (derivative) addScaled(byFrequency, derivative, k + 1);
+      });
+      const { columns } = this.columns(frequency, harmonics.length);
+      const fit = this.solve([...columns, byFrequency], walkPerSecond);
+      frequency += fit.coefficients[columns.length] ?? 0;
+    }
+    return 1 / frequency;
+  }
+
+  fit(period: number) {
+    const { cadenceSeconds, timeSeconds } = this.motion.frames;
+    const most = Math.min(
+      MOST_HARMONICS,
+      Math.max(1, Math.floor(period / (FRAMES_A_PERIOD * cadenceSeconds))),
+    );
+    const all = this.columns(1 / period, most);
+    const walkPerSecond = likeliestWalk(this.motion.frames, all.columns, this.series);
+    const first = all.columns.length - 2 * most;
+    const orders = bestOrder(this.solve(all.columns, walkPerSecond), first, most);
+    const { columns, others } = this.columns(1 / period, orders);
+    const fit = this.solve(columns, walkPerSecond);
+    const otherLines = others.map((line, i) => fittedLine(line.frequency, fit, 1 + 2 * i));
+    return {
+      harmonics: Array.from({ length: orders }, (_, k) =>
+        fittedLine((k + 1) / period, fit, first + 2 * k),
+      ),
+      otherLines: otherLines.sort((a, b) => b.amplitude - a.amplitude),
+      driftPerSecond: fit.coefficients[0] ?? 0,
+      driftStandardError: Math.sqrt(fit.covariance[0] ?? 0),
+      walkPerSecond,
+      noise: fit.noise,
+      count: timeSeconds.length,
+    };
+  }
+
+  private solve(columns: readonly Float64Array[], walkPerSecond: number): WhitenedFit {
+    return whitenedLeastSquares(this.motion.frames, walkPerSecond, columns, this.series);
+  }
+
+  /** Drift, the other lines, then `orders` harmonics. */
+  private columns(frequency: number, orders: number) {
+    const { timeSeconds } = this.motion.frames;
+    const others = this.motion.lines.filter((line) => !this.isHarmonic(line, frequency));
+    const columns = [timeSeconds];
+    const add = (each: number) => {
+      const bare = { frequency: each, cosine: 0, sine: 0, amplitude: 0, standardError: 0 };
+      columns.push(...lineColumns(timeSeconds, bare));
+    };
+    for (const line of others) add(line.frequency);
+    for (let order = 1; order <= orders; order++) add(order * frequency);
+    return { columns, others };
+  }
+
+  private isHarmonic(line: FittedLine, worm: number): boolean {
+    const order = Math.max(1, Math.round(line.frequency / worm));
+    const distance = Math.abs(line.frequency - order * worm);
+    return (
+      order <= MOST_HARMONICS && distance < Math.max(1 / this.span, LABEL_WIDTH * order * worm)
+    );
+  }
+}
+
+function bestOrder(fit: WhitenedFit, first: number, most: number): number {
+  let best = 1;
+  let bestCost = Infinity;
+  for (let order = 1; order <= most; order++) {
+    const squares = fit.squaresByColumns[first + 2 * order] ?? 0;
+    const cost = fit.count * Math.log(squares) + 2 * (2 * order);
+    if (cost < bestCost) [best, bestCost] = [order, cost];
+  }
+  return best;
+}
+
+function fittedLine(frequency: number, fit: WhitenedFit, place: number): FittedLine {
+  const cosine = fit.coefficients[place] ?? 0;
+  const sine = fit.coefficients[place + 1] ?? 0;
+  return {
+    frequency,
+    cosine,
+    sine,
+    amplitude: Math.hypot(cosine, sine),
+    standardError: amplitudeError(fit, place, cosine, sine),
+  };
+}
+
+/** Phase of A·cos(2π f t + phase), degrees in [0, 360). */
+export function phaseDegrees(line: FittedLine): number {
+  return ((((Math.atan2(-line.sine, line.cosine) * 180) / Math.PI) % 360) + 360) % 360;
+}
+
+/**
+ * Peak to peak and steepest slope of the fitted curve over one turn (by 1440 points, a quarter of a degree), and
+ * its RMS sqrt(Σ A² / 2), in the unit of the harmonics.
+ */
+export function curveMeasures(harmonics: readonly FittedLine[]) {
+  let [lowest, highest, steepest] = [Infinity, -Infinity, 0];
+  const first = harmonics[0]?.frequency ?? 1;
+  for (let point = 0; point < CURVE_POINTS; point++) {
+    let [value, slope] = [0, 0];
+    for (const { frequency, cosine, sine } of harmonics) {
+      const angle = (2 * Math.PI * (frequency / first) * point) / CURVE_POINTS;
+      value += cosine * Math.cos(angle) + sine * Math.sin(angle);
+      slope += 2 * Math.PI * frequency * (sine * Math.cos(angle) - cosine * Math.sin(angle));
+    }
+    lowest = Math.min(lowest, value);
+    highest = Math.max(highest, value);
+    steepest = Math.max(steepest, Math.abs(slope));
+  }
+  const square = harmonics.reduce((sum, line) => sum + line.amplitude ** 2 / 2, 0);
+  return { peakToPeak: highest - lowest, rms: Math.sqrt(square), steepest };
+}
+
+/**
+ * REPORT's PeriodicError.
+ *
+ * @param skyPerAxisAngle cos(declination), by which all is divided to give axis angles; null where it is not known.
+ */
+export function describePeriodicError(
+  worm: WormFit,
+  curve: PeriodicError['curve'],
+  skyPerAxisAngle: number | null,
+): PeriodicError {
+  const scale = 1 / (skyPerAxisAngle ?? 1);
+  const { peakToPeak, rms, steepest } = curveMeasures(worm.harmonics);
+  const scaled = (value: number | null) => (value === null ? null : scale * value);
+  return {
+    periodSeconds: worm.periodSeconds,
+    periodFrom: worm.periodFrom,
+    peakToPeakArcsec: scale * peakToPeak,
+    rmsArcsec: scale * rms,
+    steepestArcsecPerSecond: scale * steepest,
+    turns: worm.turns,
+    atAxis: skyPerAxisAngle !== null,
+    harmonics: worm.harmonics.map((line, k) => ({
+      order: k + 1,
+      periodSeconds: worm.periodSeconds / (k + 1),
+      amplitudeArcsec: scale * line.amplitude,
+      phaseDegrees: phaseDegrees(line),
+      standardError: scale * line.standardError,
+    })),
+    curve: curve.map(({ phase, medianArcsec, q1Arcsec, q3Arcsec }) => ({
+      phase,
+      medianArcsec: scaled(medianArcsec),
+      q1Arcsec: scaled(q1Arcsec),
+      q3Arcsec: scaled(q3Arcsec),
+    })),
+  };
+}

@@ -1,0 +1,136 @@
+import { type Response } from '../analysis-document';
+import { SIDEREAL_RATE_ARCSEC_PER_SECOND } from '../spectrum/gear-periods';
+import { fitMotion, type MotionFit } from './motion-fit';
+import { type UsedResponse } from './mount-motion';
+import { type LevelFrames } from './whitened-least-squares';
+
+/** Response of one axis as the log tells it, arcsec on the sky per unit of correction. */
+export interface EstimatedResponse {
+  /** Mean of both directions. */
+  readonly perUnit: number;
+  readonly standardError: number;
+  /** Half of (positive − negative). */
+  readonly halfDifference: number;
+  readonly halfDifferenceError: number;
+  /** Of one direction. */
+  readonly directionError: number;
+  readonly fit: MotionFit;
+}
+
+/** A relative standard error beyond this tells nothing. */
+const LARGEST_RELATIVE_ERROR = 0.2;
+const CONTRADICTION = 3;
+const FEWEST_A_DIRECTION = 20;
+
+/**
+ * Response of one axis by a one-step prediction-error fit (`fitMotion`), both directions together with their difference.
+ *
+ * @param moves Displacements that the corrections command, in units of the correction, towards +error positive.
+ * @param throughPlay The same after the gap of the gears, where there is one; else `moves` itself.
+ * @returns null with fewer than 20 corrections, or when the star does not follow them.
+ */
+export function estimateResponse(
+  frames: LevelFrames,
+  errorArcsec: Float64Array,
+  moves: Float64Array,
+): EstimatedResponse | null {
+  const positive = moves.reduce((count, move) => count + (move > 0 ? 1 : 0), 0);
+  const negative = moves.reduce((count, move) => count + (move < 0 ? 1 : 0), 0);
+  if (positive + negative < FEWEST_A_DIRECTION) return null;
+  const both = Math.min(positive, negative) >= FEWEST_A_DIRECTION;
+  const commands = [summed(moves, (move) => move)];
+  if (both) commands.push(summed(moves, Math.abs));
+  const fit = fitMotion({ frames, series: errorArcsec, commands, startLines: [] });
+  const perUnit = fit.coefficients[0] ?? 0;
+  const variance = fit.covariance[0] ?? 0;
+  const differenceVariance = both ? (fit.covariance[3] ?? 0) : 0;
+  const standardError = Math.sqrt(variance);
+  if (!(perUnit > 0) || !(standardError < LARGEST_RELATIVE_ERROR * perUnit)) return null;
+  return {
+    perUnit,
+    standardError,
+    halfDifference: both ? (fit.coefficients[1] ?? 0) : 0,
+    halfDifferenceError: Math.sqrt(differenceVariance),
+    directionError: Math.sqrt(
+      variance + differenceVariance + 2 * Math.abs(both ? (fit.covariance[1] ?? 0) : 0),
+    ),
+    fit,
+  };
+}
+
+function summed(moves: Float64Array, part: (move: number) => number): Float64Array {
+  const sums = new Float64Array(moves.length);
+  let sum = 0;
+  for (let n = 1; n < moves.length; n++) {
+    sum += part(moves[n - 1] ?? 0);
+    sums[n] = sum;
+  }
+  return sums;
+}
+
+/**
+ * What one unit of correction should do by the rig, arcsec on the sky: guide rate · 15.0411 ″/s · cos δ in RA. A
+ * correction in arcsec should do what it says. Null where the rig or the declination is not told.
+ */
+export function expectedPerUnit(
+  unit: 'ms' | 'arcsec',
+  guideRateSidereal: number | undefined,
+  skyPerAxisAngle: number | null,
+): number | null {
+  if (unit === 'arcsec') return 1;
+  if (guideRateSidereal === undefined || skyPerAxisAngle === null) return null;
+  return (guideRateSidereal * SIDEREAL_RATE_ARCSEC_PER_SECOND * skyPerAxisAngle) / 1000;
+}
+
+/**
+ * The response that the uncorrected motion rests on: the rig's, unless the log contradicts it by more than three
+ * standard errors; else the log's; else null. A difference between the directions that the log shows beyond three
+ * standard errors is kept either way: it would add up to a drift.
+ */
+export function chooseResponse(
+  expected: number | null,
+  estimated: EstimatedResponse | null,
+): UsedResponse | null {
+  const contradicted =
+    expected !== null &&
+    estimated !== null &&
+    Math.abs(estimated.perUnit - expected) > CONTRADICTION * estimated.standardError;
+  const perUnit = expected === null || contradicted ? estimated?.perUnit : expected;
+  if (perUnit === undefined) return null;
+  const from = perUnit === expected ? 'rig' : 'log';
+  const unequal =
+    estimated !== null &&
+    Math.abs(estimated.halfDifference) > CONTRADICTION * estimated.halfDifferenceError;
+  const half = unequal ? (estimated.halfDifference / estimated.perUnit) * perUnit : 0;
+  return {
+    positivePerUnit: perUnit + half,
+    negativePerUnit: perUnit - half,
+    relativeStandardError:
+      from === 'rig' || estimated === null ? 0 : estimated.standardError / estimated.perUnit,
+    from,
+  };
+}
+
+/** REPORT's Response: what the log tells, in arcsec per second of correction; corrections in arcsec have no seconds. */
+export function describeResponse(
+  unit: 'ms' | 'arcsec',
+  expected: number | null,
+  estimated: EstimatedResponse | null,
+  used: UsedResponse | null,
+): Response {
+  const perSecond = (perUnit: number | null | undefined) =>
+    unit === 'ms' && perUnit !== null && perUnit !== undefined ? 1000 * perUnit : null;
+  const positive = estimated && estimated.perUnit + estimated.halfDifference;
+  const negative = estimated && estimated.perUnit - estimated.halfDifference;
+  return {
+    positiveArcsecPerSecond: perSecond(positive),
+    negativeArcsecPerSecond: perSecond(negative),
+    standardError: perSecond(estimated?.directionError),
+    expectedArcsecPerSecond: perSecond(expected),
+    asymmetry:
+      estimated && estimated.halfDifferenceError > 0
+        ? (2 * estimated.halfDifference) / estimated.perUnit
+        : null,
+    from: used?.from ?? 'log',
+  };
+}
