@@ -8,7 +8,7 @@ import { type ByHandRange, setAsideFrames } from './set-aside';
 /**
  * One run of a log in arcseconds on the sky, with the frames that do not count marked. O(n).
  *
- * @param range At least two frames.
+ * @param range At least one frame; the cadence of a single one is 0.
  * @param arcsecPerUnit 1 for a log in arcseconds, the guide scale for one in guide pixels.
  * @param byHand Stretches that the user leaves out, seconds in the run.
  */
@@ -38,7 +38,7 @@ export function prepareRun(
   return {
     count: to - from,
     timeSeconds,
-    cadenceSeconds: medianSpacing(timeSeconds),
+    cadenceSeconds: to - from < 2 ? 0 : medianSpacing(timeSeconds),
     raErrorArcsec,
     decErrorArcsec,
     raCorrection: correction(frames.raCorrection),

@@ -26,6 +26,8 @@ export interface Periodogram {
 const EVEN_WITHIN = 0.05;
 /** Highest sidelobe of a Hann window, −31.5 dB, in power, with some room. */
 const HANN_SIDELOBES = 0.002;
+/** The highest frequency is at most so many times the number of frames over the duration. */
+const DENSEST = 4;
 /** Gaps and missing frames give a periodogram without window sidelobes of any height; above this part of the strongest line they are rare. */
 const GAPPED_SIDELOBES = 0.25;
 
@@ -73,7 +75,8 @@ function hannPeriodogram(timeSeconds: Float64Array): Periodogram {
 
 function lombScarglePeriodogram(timeSeconds: Float64Array, cadenceSeconds: number): Periodogram {
   const duration = at(timeSeconds, timeSeconds.length - 1) - at(timeSeconds, 0);
-  const highest = 0.5 / cadenceSeconds;
+  // Frames in bursts with long gaps between would need an endless grid for the Nyquist frequency of the bursts.
+  const highest = Math.min(0.5 / cadenceSeconds, (DENSEST * timeSeconds.length) / duration);
   const { step, explained } = fastLombScargle(timeSeconds, highest);
   return {
     method: 'lomb-scargle',
