@@ -1,21 +1,27 @@
 import compression from 'compression';
 import express, { type Express, Router } from 'express';
-import helmet from 'helmet';
 import type { Knex } from 'knex';
 import type pg from 'pg';
 import type { Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
+import { accountRoutes } from './accounts/account-routes';
+import { AccountService } from './accounts/account-service';
+import { Passwords } from './accounts/password';
+import { sessionRoutes } from './accounts/session-routes';
 import type { Configuration } from './configuration';
 import type { NotifyHub } from './database/notify-hub';
+import { apiRoutes } from './http/api-routes';
 import { notFound } from './http/app-error';
 import { errorHandler } from './http/error-handler';
 import { EventStreams } from './http/event-streams';
 import { healthRoutes } from './http/health-routes';
 import { type Allowances, Limits } from './http/limits';
 import { sameOriginOnly } from './http/same-origin';
-import { sessionHandlers } from './http/session';
+import { securityHeaders } from './http/security-headers';
+import { type Authenticator, makeAuthenticator, sessionHandlers } from './http/session';
 import { SessionStore } from './http/session-store';
 import { webClient } from './http/web-client';
+import { operations } from './operations';
 
 export interface AppParts {
   readonly configuration: Configuration;
@@ -37,6 +43,12 @@ export interface App {
   close(): void;
 }
 
+interface ResourceParts {
+  readonly parts: AppParts;
+  readonly authenticator: Authenticator;
+  readonly streams: EventStreams;
+}
+
 /** The web application from its parts: the one place that builds services. */
 export function buildApp(parts: AppParts): App {
   const { configuration, logger } = parts;
@@ -50,20 +62,27 @@ export function buildApp(parts: AppParts): App {
   app.set('trust proxy', configuration.TRUST_PROXY);
   app.set('query parser', 'simple'); // no nested objects in a query
   app.use(pinoHttp({ logger, autoLogging: { ignore: ({ url }) => url === '/healthz' } }));
-  app.use(securityHeaders(configuration.PUBLIC_URL.startsWith('https:')));
+  const isHttps = configuration.PUBLIC_URL.startsWith('https:');
+  app.use(securityHeaders(isHttps));
   app.use(compression());
-  app.use(healthRoutes(parts.knex));
+  app.use(healthRoutes(() => answers(parts.knex)));
 
   const api = '/api/v1';
   app.use(api, sameOriginOnly(configuration.PUBLIC_URL)); // before any body is read
-  app.use(api, sessionHandlers(store, configuration.SESSION_SECRET));
+  app.use(api, (_req, res, next) => {
+    res.set('Cache-Control', 'private, no-cache'); // what a person sees is nobody else's
+    next();
+  });
+  app.use(apiRoutes(operations, isHttps));
+  const authenticator = makeAuthenticator(store);
+  app.use(api, sessionHandlers(store, authenticator, configuration.SESSION_SECRET));
   app.use(api, express.json({ limit: '256kb' }));
-  app.use(resourceRoutes(parts, streams));
+  app.use(resourceRoutes({ parts, authenticator, streams }));
   app.use('/api', () => {
     throw notFound('address');
   });
 
-  if (parts.webFolder !== null) app.use(webClient(parts.webFolder));
+  if (parts.webFolder !== null) app.use(webClient(parts.webFolder, isHttps));
   app.use(() => {
     throw notFound('page');
   });
@@ -77,30 +96,22 @@ export function buildApp(parts: AppParts): App {
   };
 }
 
-/** Each resource with its service. The paths are those of the contract, whole. */
-function resourceRoutes(parts: AppParts, _streams: EventStreams): Router {
-  const router = Router();
-  const _limits = new Limits(parts.pool, parts.allowances);
-  return router;
+/** Whether the database answers: a process that cannot reach it should get no requests. */
+function answers(knex: Knex): Promise<boolean> {
+  return knex.raw('SELECT 1').then(
+    () => true,
+    () => false,
+  );
 }
 
-function securityHeaders(isHttps: boolean): ReturnType<typeof helmet> {
-  const upgrade = isHttps ? { upgradeInsecureRequests: [] } : { upgradeInsecureRequests: null };
-  return helmet({
-    contentSecurityPolicy: {
-      useDefaults: false,
-      directives: {
-        defaultSrc: ["'self'"],
-        scriptSrc: ["'self'"],
-        styleSrc: ["'self'", "'unsafe-inline'"],
-        imgSrc: ["'self'", 'data:', 'blob:'],
-        objectSrc: ["'none'"],
-        baseUri: ["'self'"],
-        formAction: ["'self'"],
-        frameAncestors: ["'none'"],
-        ...upgrade,
-      },
-    },
-    strictTransportSecurity: isHttps,
-  });
+/** Each resource with its service. The paths are those of the contract, whole. */
+function resourceRoutes({ parts, authenticator }: ResourceParts): Router {
+  const { knex, configuration } = parts;
+  const limits = new Limits(parts.pool, parts.allowances);
+  const accounts = new AccountService(knex, new Passwords(parts.passwordRounds));
+  const mailsShownAt = configuration.LOCAL_MAIL_URL ?? null;
+  return Router().use(
+    accountRoutes({ accounts, limits, mailsShownAt }),
+    sessionRoutes({ accounts, authenticator, limits }),
+  );
 }

@@ -15,6 +15,8 @@ const environmentSchema = z.object({
   NODE_ENV: z.enum(['development', 'test', 'production']).default('development'),
   /** Sender of the e-mails; made from PUBLIC_URL when it is missing. */
   MAIL_FROM: z.string().min(3).optional(),
+  /** Where the local mail catcher shows its mails: told to who waits for one. */
+  LOCAL_MAIL_URL: z.url().optional(),
 });
 
 /** What the environment says, checked once at the start of each process. */

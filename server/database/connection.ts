@@ -2,9 +2,10 @@ import knexFactory, { type Knex } from 'knex';
 import { knexSnakeCaseMappers } from 'objection';
 import pg from 'pg';
 
-const INT8_OID = 20;
 // int8 comes as a string; every count and size here fits a double.
-pg.types.setTypeParser(INT8_OID, Number);
+pg.types.setTypeParser(pg.types.builtins.INT8, Number);
+// A date is a day of the calendar and no instant of this process's time zone.
+pg.types.setTypeParser(pg.types.builtins.DATE, String);
 
 /** Queries in camelCase, columns in snake_case: the mapping stands here and nowhere else. */
 export function makeKnex(databaseUrl: string, maxConnections: number): Knex {

@@ -3,8 +3,8 @@ import type { Response } from 'express';
 const HEARTBEAT_MS = 15_000;
 
 export interface EventStream {
-  send(event: string, data: unknown): void;
-  end(): void;
+  readonly send: (event: string, data: unknown) => void;
+  readonly end: () => void;
 }
 
 /** All Server-Sent Event streams of a process: an open one would hold the server's close for ever. */

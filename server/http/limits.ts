@@ -1,3 +1,4 @@
+import type { Request } from 'express';
 import type pg from 'pg';
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
 import { tooManyRequests } from './app-error';
@@ -63,4 +64,9 @@ export class Limits {
     if (!limiter) throw new Error(`There is no limit called ${name}`);
     return limiter;
   }
+}
+
+/** The network address that asks: the key of the limits that end in `ByAddress`. */
+export function addressOf(req: Request): string {
+  return req.ip ?? 'unknown';
 }

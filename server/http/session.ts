@@ -6,8 +6,16 @@ import type { SignedInAccount } from './signed-in';
 
 export const SESSION_COOKIE = 'stillpier-session';
 
+type Done = (error: unknown, account?: SignedInAccount | false) => void;
+
+export type Authenticator = InstanceType<typeof passport.Passport>;
+
 /** Session and signed-in account of each request. */
-export function sessionHandlers(store: SessionStore, secret: string): RequestHandler[] {
+export function sessionHandlers(
+  store: SessionStore,
+  authenticator: Authenticator,
+  secret: string,
+): RequestHandler[] {
   return [
     session({
       store,
@@ -18,17 +26,18 @@ export function sessionHandlers(store: SessionStore, secret: string): RequestHan
       // 'auto': Secure where the request came by https, as it does in production
       cookie: { httpOnly: true, sameSite: 'lax', secure: 'auto', path: '/' },
     }),
-    passport.initialize(),
-    passportFor(store).session(),
+    authenticator.initialize() as RequestHandler,
+    authenticator.session() as RequestHandler,
   ];
 }
 
-function passportFor(store: SessionStore): passport.Authenticator {
+/** Passport on these sessions: the session names the account, the store has read it with it. */
+export function makeAuthenticator(store: SessionStore): Authenticator {
   const authenticator = new passport.Passport();
   authenticator.serializeUser<string>((account, done) => {
     done(null, (account as SignedInAccount).id);
   });
-  authenticator.deserializeUser<string, Request>((req, _id, done) => {
+  authenticator.deserializeUser((req: Request, _id: string, done: Done) => {
     done(null, store.accountOf(req) ?? false);
   });
   return authenticator;

@@ -1,10 +1,12 @@
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
-import express, { type RequestHandler, Router } from 'express';
+import express, { Router } from 'express';
+import { sendPage } from './security-headers';
 
 const HASHED_NAME = /-[A-Z0-9]{8}\.(js|css|woff2|svg|png)$/;
 
 /** The built client: its files, and its first page for every address that a person opens. */
-export function webClient(folder: string): Router {
+export function webClient(folder: string, isHttps: boolean): Router {
   const router = Router();
   router.use(
     express.static(folder, {
@@ -15,14 +17,15 @@ export function webClient(folder: string): Router {
       },
     }),
   );
-  router.get('/{*page}', firstPage(folder));
+  router.get('/{*page}', (req, res, next) => {
+    const isFile = path.extname(req.path) !== '' && req.path !== '/index.html';
+    if (isFile || !req.accepts('html')) {
+      next();
+      return;
+    }
+    const page = readFileSync(path.join(folder, 'index.html'), 'utf8');
+    // Angular gives the nonce to each style sheet that it adds.
+    sendPage(res, isHttps, (nonce) => page.replace('<app-root', `<app-root ngCspNonce="${nonce}"`));
+  });
   return router;
-}
-
-function firstPage(folder: string): RequestHandler {
-  return (req, res, next) => {
-    const isFile = path.extname(req.path) !== '';
-    if (isFile || req.accepts(['html']) === false) next();
-    else res.set('Cache-Control', 'no-cache').sendFile('index.html', { root: folder });
-  };
 }

@@ -2,9 +2,9 @@ import type { PostgresPrograms } from './postgres-programs.mjs';
 
 export interface Cluster {
   readonly url: string;
-  urlOf(database: string): string;
-  psql(sql: string): string;
-  stop(): void;
+  readonly urlOf: (database: string) => string;
+  readonly psql: (sql: string) => string;
+  readonly stop: () => void;
 }
 
 export function startThrowawayCluster(

@@ -1,0 +1,35 @@
+import type { Task } from 'graphile-worker';
+import type { Knex } from 'knex';
+import { writeAccountMail } from '../accounts/account-mails';
+import { type LaidOutMail, layOutMail } from './mail-layout';
+import { mailJobSchema } from './mail-queue';
+
+export interface OutgoingMail extends LaidOutMail {
+  readonly from: string;
+  readonly to: string;
+}
+
+export interface MailParts {
+  readonly knex: Knex;
+  /** As nodemailer makes it. */
+  readonly transport: { sendMail(mail: OutgoingMail): Promise<unknown> };
+  /** Where the links lead to. */
+  readonly publicUrl: string;
+  readonly sender: string;
+}
+
+/** The `send-mail` task of the queue. A mail server that is away makes the queue try again. */
+export function sendMailTask({ knex, transport, publicUrl, sender }: MailParts): Task {
+  return async (payload) => {
+    const letter = await writeAccountMail(knex, publicUrl, mailJobSchema.parse(payload));
+    if (!letter) return;
+    await transport.sendMail({ from: sender, to: letter.to, ...layOutMail(letter) });
+  };
+}
+
+/** The sender that stands in the environment, or one that is made from the public address. */
+export function senderOf(publicUrl: string, mailFrom: string | undefined): string {
+  const { hostname } = new URL(publicUrl);
+  const domain = /[a-z]/i.test(hostname) && !hostname.startsWith('[') ? hostname : 'localhost';
+  return mailFrom ?? `Stillpier <no-reply@${domain}>`;
+}
