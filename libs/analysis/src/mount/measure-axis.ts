@@ -73,8 +73,7 @@ export function measureAxis(input: AxisInput): MeasuredAxis {
     fit,
     worm !== null && 'harmonics' in worm ? worm : null,
   );
-  const jumps = { ...fit.frames, restartFrames: input.frames.restartFrames };
-  const motion = withoutJumps(jumpy, model.smooth, jumps, fit.walkPerSecond);
+  const motion = withoutJumps(jumpy, model.smooth, fit.frames, fit.walkPerSecond);
   const rest = motion.map((value, n) => value - (model.smooth[n] ?? 0));
   const floor = seeingFloor(rest, input.frames, fit.noise);
   const gain = corrected

@@ -37,9 +37,15 @@ const MOST_LINES = 12;
 const ONE_LINE = 0.8;
 /** A frequency that moves less than this part of the resolution has settled. */
 const SETTLED = 0.02;
-const BUMP_SIGMAS = 5;
-/** So many bumps in a row are no bump but a step: the level starts anew. */
-const STEP_FRAMES = 4;
+/** Step in the logarithm of the walk for its slopes. */
+const WALK_STEP = 0.5;
+/** Where the likelihood is flat the walk is next to nothing and moves nothing: no larger variance is needed. */
+const MOST_WALK_VARIANCE = 4;
+const BUMP_SIGMAS = 4.5;
+/** A gust has faded so many frames after its last bump. */
+const FADING_FRAMES = 2;
+/** So many bumps in a row, with the frames after them, are no bump but a step: the level starts anew. */
+const STEP_FRAMES = 3;
 
 /**
  * One-step prediction-error fit of the motion of one axis (SCIENCE 4):
@@ -70,8 +76,11 @@ export function fitMotion(input: MotionFitInput): MotionFit {
     const found = pass < MOST_PASSES - 2 ? newLines(frames, fit, refined, span) : [];
     lines = [...refined, ...found];
     const last = pass >= MOST_PASSES || (found.length === 0 && !moved && !unrefined && pass > 1);
-    if (last) return described(frames, walkPerSecond, fit, commands.length, lines);
-    if (pass > 1) frames = withoutBumps(frames, fit.innovations);
+    if (last) {
+      const solve = (walk: number) => whitenedLeastSquares(frames, walk, columns, series);
+      return described(frames, walkPerSecond, fit, commands.length, lines, solve);
+    }
+    frames = withoutBumps(input.frames, frames, fit.innovations);
   }
 }
 
@@ -104,25 +113,32 @@ function newLines(
     .map(newLine);
 }
 
-/** Leaves out frames whose innovation no noise explains, so that a gust does not pass for wandering. */
-function withoutBumps(frames: LevelFrames, innovations: Float64Array): LevelFrames {
+/**
+ * Leaves out frames whose innovation no noise explains and the two after each, in which a gust fades, so that a gust
+ * does not pass for wandering. Frames left out four in a row because each was too far off are a step: the level
+ * starts anew at the first of them, and all count again.
+ */
+function withoutBumps(
+  given: LevelFrames,
+  frames: LevelFrames,
+  innovations: Float64Array,
+): LevelFrames {
   const limit = BUMP_SIGMAS * robustSigma(innovations.filter((value) => value !== 0));
   const used = Uint8Array.from(frames.used);
   const restarts = new Set(frames.restartFrames);
   let inARow = 0;
-  innovations.forEach((innovation, n) => {
-    inARow = Math.abs(innovation) > limit ? inARow + 1 : 0;
-    if (inARow === 0) return;
-    used[n] = 0;
-    if (inARow === STEP_FRAMES) {
-      used.fill(1, n - STEP_FRAMES + 1, n + 1);
-      restarts.add(n - STEP_FRAMES + 1);
-      inARow = 0;
-    }
-  });
-  used.forEach((value, n) => {
-    if (frames.used[n] === 0 && value === 1) used[n] = 0;
-  });
+  let fading = 0;
+  for (let n = 0; n < used.length; n++) {
+    if (given.used[n] !== 1) continue;
+    const isBump = Math.abs(innovations[n] ?? 0) > limit;
+    inARow = isBump || used[n] === 0 ? inARow + 1 : 0;
+    fading = isBump ? FADING_FRAMES : fading - 1;
+    if (isBump || fading >= 0) used[n] = 0;
+    if (inARow < STEP_FRAMES + FADING_FRAMES) continue;
+    restarts.add(n - inARow + 1);
+    for (let back = n - inARow + 1; back <= n; back++) used[back] = given.used[back] ?? 0;
+    [inARow, fading] = [0, 0];
+  }
   return { ...frames, used, restartFrames: [...restarts].sort((a, b) => a - b) };
 }
 
@@ -132,22 +148,47 @@ function described(
   fit: WhitenedFit,
   commands: number,
   lines: readonly FittedLine[],
+  solve: (walkPerSecond: number) => WhitenedFit,
 ): MotionFit {
   const size = fit.coefficients.length;
-  const covariance = new Float64Array(commands * commands);
-  for (let i = 0; i < commands; i++) {
-    covariance.set(fit.covariance.subarray(i * size, i * size + commands), i * commands);
-  }
   return {
     frames,
     walkPerSecond,
     noise: fit.noise,
     coefficients: fit.coefficients.slice(0, commands),
-    covariance,
+    covariance: commandCovariance(walkPerSecond, fit, commands, solve),
     driftPerSecond: fit.coefficients[commands] ?? 0,
     driftStandardError: Math.sqrt(fit.covariance[commands * size + commands] ?? 0),
     lines: [...lines].sort((a, b) => b.amplitude - a.amplitude),
     innovations: fit.innovations,
     count: fit.count,
   };
+}
+
+/**
+ * Covariance of the commands' coefficients with the walk's own uncertainty in it: on a rough drive the two hang together.
+ * The walk's logarithm has the variance 2 / curvature of the cost; it moves each coefficient along its slope.
+ */
+function commandCovariance(
+  walkPerSecond: number,
+  fit: WhitenedFit,
+  commands: number,
+  solve: (walkPerSecond: number) => WhitenedFit,
+): Float64Array {
+  const size = fit.coefficients.length;
+  const covariance = new Float64Array(commands * commands);
+  if (commands === 0) return covariance;
+  const lower = solve(walkPerSecond * Math.exp(-WALK_STEP));
+  const upper = solve(walkPerSecond * Math.exp(WALK_STEP));
+  const curvature = (lower.cost - 2 * fit.cost + upper.cost) / WALK_STEP ** 2;
+  const variance = curvature > 0 ? Math.min(2 / curvature, MOST_WALK_VARIANCE) : MOST_WALK_VARIANCE;
+  const slope = (i: number) =>
+    ((upper.coefficients[i] ?? 0) - (lower.coefficients[i] ?? 0)) / (2 * WALK_STEP);
+  for (let i = 0; i < commands; i++) {
+    for (let j = 0; j < commands; j++) {
+      covariance[i * commands + j] =
+        (fit.covariance[i * size + j] ?? 0) + variance * slope(i) * slope(j);
+    }
+  }
+  return covariance;
 }
