@@ -6,8 +6,10 @@ import type { Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
 import { accountRoutes } from './accounts/account-routes';
 import { AccountService } from './accounts/account-service';
-import { Passwords } from './accounts/password';
+import { Passwords } from './accounts/passwords';
 import { sessionRoutes } from './accounts/session-routes';
+import { columnMapRoutes } from './column-maps/column-map-routes';
+import { ColumnMapService } from './column-maps/column-map-service';
 import type { Configuration } from './configuration';
 import type { NotifyHub } from './database/notify-hub';
 import { apiRoutes } from './http/api-routes';
@@ -21,7 +23,19 @@ import { securityHeaders } from './http/security-headers';
 import { type Authenticator, makeAuthenticator, sessionHandlers } from './http/session';
 import { SessionStore } from './http/session-store';
 import { webClient } from './http/web-client';
+import { ImportEvents } from './imports/import-events';
+import { importRoutes } from './imports/import-routes';
+import { ImportService } from './imports/import-service';
+import { UploadService } from './imports/upload-service';
+import { nightRoutes } from './nights/night-routes';
+import { NightService } from './nights/night-service';
+import { RigStateService } from './nights/rig-state-service';
+import { RunSeriesService } from './nights/run-series-service';
 import { operations } from './operations';
+import { rigRoutes } from './rigs/rig-routes';
+import { RigService } from './rigs/rig-service';
+import { setupRoutes } from './setups/setup-routes';
+import { SetupService } from './setups/setup-service';
 
 export interface AppParts {
   readonly configuration: Configuration;
@@ -105,13 +119,25 @@ function answers(knex: Knex): Promise<boolean> {
 }
 
 /** Each resource with its service. The paths are those of the contract, whole. */
-function resourceRoutes({ parts, authenticator }: ResourceParts): Router {
+function resourceRoutes({ parts, authenticator, streams }: ResourceParts): Router {
   const { knex, configuration } = parts;
   const limits = new Limits(parts.pool, parts.allowances);
   const accounts = new AccountService(knex, new Passwords(parts.passwordRounds));
+  const imports = new ImportService(knex);
+  const uploads = new UploadService(knex, configuration.UPLOAD_LIMIT_MIB);
+  const events = new ImportEvents(imports, parts.hub, streams, parts.logger);
   const mailsShownAt = configuration.LOCAL_MAIL_URL ?? null;
   return Router().use(
     accountRoutes({ accounts, limits, mailsShownAt }),
     sessionRoutes({ accounts, authenticator, limits }),
+    rigRoutes(new RigService(knex)),
+    setupRoutes(new SetupService(knex)),
+    columnMapRoutes(new ColumnMapService(knex)),
+    importRoutes({ imports, uploads, events, limits }),
+    nightRoutes({
+      nights: new NightService(knex),
+      rigStates: new RigStateService(knex),
+      runSeries: new RunSeriesService(knex),
+    }),
   );
 }

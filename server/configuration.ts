@@ -11,6 +11,8 @@ const environmentSchema = z.object({
   HOST: z.string().default('127.0.0.1'),
   /** How many reverse proxies stand in front: their X-Forwarded-* headers are believed. */
   TRUST_PROXY: z.coerce.number().int().min(0).default(0),
+  /** The largest guide log that is taken. */
+  UPLOAD_LIMIT_MIB: z.coerce.number().int().min(1).default(200),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   NODE_ENV: z.enum(['development', 'test', 'production']).default('development'),
   /** Sender of the e-mails; made from PUBLIC_URL when it is missing. */

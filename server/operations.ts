@@ -1,6 +1,19 @@
 import { accountApi } from './accounts/account-api';
+import { columnMapApi } from './column-maps/column-map-api';
 import { serviceApi } from './http/api-routes';
 import type { Operation } from './http/operation';
+import { importApi } from './imports/import-api';
+import { nightApi } from './nights/night-api';
+import { rigApi } from './rigs/rig-api';
+import { setupApi } from './setups/setup-api';
 
 /** Every route of the application, as its resource describes it. */
-export const operations: readonly Operation[] = [...accountApi, ...serviceApi];
+export const operations: readonly Operation[] = [
+  ...accountApi,
+  ...rigApi,
+  ...setupApi,
+  ...columnMapApi,
+  ...importApi,
+  ...nightApi,
+  ...serviceApi,
+];

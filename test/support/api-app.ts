@@ -1,9 +1,10 @@
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { accountPaths } from '@stillpier/contract';
+import type { Express } from 'express';
 import { Logger, runOnce } from 'graphile-worker';
 import type { Knex } from 'knex';
-import { pino } from 'pino';
+import { type Logger as Log, pino } from 'pino';
 import request from 'supertest';
 import { buildApp } from '../../server/app';
 import { readConfiguration } from '../../server/configuration';
@@ -26,6 +27,8 @@ export interface TestApp {
   readonly knex: Knex;
   /** Where the application listens. */
   readonly baseUrl: string;
+  /** The routes of the application, for the spec that compares them with their description. */
+  readonly express: Express;
   /** A browser without a session. */
   agent(): Agent;
   /** Signs up and confirms; answers a browser without a session. */
@@ -43,6 +46,8 @@ export interface TestAppOptions {
   /** Allowances that a spec is about; all others are out of the way. */
   readonly allowances?: Partial<Allowances>;
   readonly webFolder?: string;
+  readonly logger?: Log;
+  readonly uploadLimitMib?: number;
 }
 
 /** The real application on a database of its own, listening on a free port of loopback. */
@@ -59,11 +64,12 @@ export async function makeApp(options: TestAppOptions = {}): Promise<TestApp> {
       PUBLIC_URL,
       SESSION_SECRET: 'only for the tests, and long enough',
       NODE_ENV: 'test',
+      UPLOAD_LIMIT_MIB: String(options.uploadLimitMib ?? 200),
     }),
     knex,
     pool,
     hub,
-    logger: pino({ level: 'silent' }),
+    logger: options.logger ?? pino({ level: 'silent' }),
     allowances: { ...outOfTheWay(), ...options.allowances },
     passwordRounds: PASSWORD_ROUNDS,
     webFolder: options.webFolder ?? null,
@@ -103,6 +109,7 @@ export async function makeApp(options: TestAppOptions = {}): Promise<TestApp> {
     databaseUrl: database.url,
     knex,
     baseUrl,
+    express: app.express,
     mailsTo,
     tokenFor,
     signedUp,

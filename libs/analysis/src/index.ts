@@ -1,5 +1,6 @@
 export * from './analyse';
 export * from './analysis-document';
+export * from './analysis-version';
 export * from './guiding/axis-measures';
 export * from './listed-run';
 export * from './measure-mount';

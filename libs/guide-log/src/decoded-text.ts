@@ -18,7 +18,7 @@ export class DecodedText {
   #encoding: Encoding;
   /** The first bytes of a UTF-8 character whose rest is in the next piece. */
   #held = new Uint8Array(0);
-  readonly #utf16: TextDecoder | null;
+  readonly #utf16: InstanceType<typeof TextDecoder> | null;
   readonly #utf8 = new TextDecoder('utf-8', { fatal: true, ignoreBOM: true });
 
   /** @param head The first bytes of the file, two at least where it has them; they are not consumed. */

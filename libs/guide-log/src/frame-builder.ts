@@ -24,6 +24,9 @@ const TIME_WORDS: Readonly<Record<TimeUnit, string>> = {
   clock: 'a time of day',
 };
 
+/** The instant at which the clock of a place shows a time; both in seconds since 1970-01-01T00:00 of their clock. */
+export type InstantOfLocalTime = (localSeconds: number) => number;
+
 /** Rows of cells to columns of numbers; no row is kept. */
 export class FrameBuilder {
   /** 0-based column by role; -1 for a role that the log does not have. */
@@ -46,6 +49,7 @@ export class FrameBuilder {
     private readonly plan: ColumnPlan,
     private readonly map: ColumnMap,
     decimal: '.' | ',',
+    private readonly instantOfLocalTime: InstantOfLocalTime | null,
   ) {
     const decimalCode = decimal.charCodeAt(0);
     this.#at = indexByRole(plan);
@@ -154,16 +158,16 @@ export class FrameBuilder {
     }
   }
 
-  /** Instant of the first frame: the log's own word, else the map's, else not known. */
+  /** Instant of the first frame: the log's own word, else the map's, else by the clock of the place, else not known. */
   #startOf(cells: readonly string[]): number | null {
     const timeCell = cells[this.#at.time] ?? '';
     if (this.#timeUnit.startsWith('epoch')) return this.#axis.read(timeCell);
     const startCell = this.plan.startColumn && cells[this.plan.startColumn.index];
-    for (const cell of [timeCell, startCell, this.map.startTime]) {
-      const time = readIsoTime(cell ?? '');
-      if (time?.hasZone) return time.epochSeconds;
-    }
-    return null;
+    const times = [timeCell, startCell, this.map.startTime].map((cell) => readIsoTime(cell ?? ''));
+    const withZone = times.find((time) => time?.hasZone);
+    if (withZone) return withZone.epochSeconds;
+    const local = times.find((time) => time !== null);
+    return local ? (this.instantOfLocalTime?.(local.epochSeconds) ?? null) : null;
   }
 
   /** A cell of a column that the log may not have. */

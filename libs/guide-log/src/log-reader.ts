@@ -3,7 +3,7 @@ import { checkPlan, type ColumnPlan } from './column-plan';
 import { DecodedText } from './decoded-text';
 import { type Dialect } from './dialect';
 import { HEAD_BYTES, decodeHead, understandHead } from './file-head';
-import { FrameBuilder } from './frame-builder';
+import { FrameBuilder, type InstantOfLocalTime } from './frame-builder';
 import { type GuideLog, type LineCounts } from './guide-log';
 import { GuideLogError } from './guide-log-error';
 import { LineEnds } from './line-ends';
@@ -17,6 +17,8 @@ const LONGEST_LINE = 1_048_576;
 
 export interface LogReaderOptions {
   readonly map?: ColumnMap | undefined;
+  /** For logs whose times carry no zone: the clock that they were written by. Without it their start is not known. */
+  readonly instantOfLocalTime?: InstantOfLocalTime | undefined;
 }
 
 /** Takes the bytes of one log in pieces of any size; what comes out does not depend on where they were cut. */
@@ -37,7 +39,7 @@ interface Opened {
 }
 
 export function createLogReader(options: LogReaderOptions): LogReader {
-  return new StreamedLogReader(options.map ?? {});
+  return new StreamedLogReader(options.map ?? {}, options.instantOfLocalTime ?? null);
 }
 
 /**
@@ -63,7 +65,10 @@ class StreamedLogReader implements LogReader {
   /** The line that is not ended yet. */
   #rest = '';
 
-  constructor(private readonly map: ColumnMap) {}
+  constructor(
+    private readonly map: ColumnMap,
+    private readonly instantOfLocalTime: InstantOfLocalTime | null,
+  ) {}
 
   push(chunk: Uint8Array): void {
     let at = 0;
@@ -110,7 +115,7 @@ class StreamedLogReader implements LogReader {
     const text = decodeHead(head, isWholeFile, this.#decoded, this.#lineEnds);
     const { dialect, plan } = understandHead(text, isWholeFile, this.map);
     checkPlan(plan, dialect);
-    const builder = new FrameBuilder(plan, this.map, dialect.decimal);
+    const builder = new FrameBuilder(plan, this.map, dialect.decimal, this.instantOfLocalTime);
     const sorter = new LineSorter(dialect, builder);
     const splitter = new RowSplitter(dialect, sorter.take);
     this.#opened = { dialect, plan, builder, sorter, splitter };

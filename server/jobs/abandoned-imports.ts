@@ -1,0 +1,24 @@
+import type { Knex } from 'knex';
+import { ImportModel } from '../imports/import-model';
+import { announceImport } from '../imports/import-notices';
+
+const SENTENCE =
+  'The program that read this file was stopped each time before it was done; the file may be too much for it.';
+
+/**
+ * Fails the imports that no worker will take up again: their job is gone, or its tries are used up and nobody works on
+ * it. That happens when every try ended by the worker's own death, which then could not say so itself.
+ */
+export async function failAbandonedImports(knex: Knex): Promise<void> {
+  const abandoned = await ImportModel.query(knex)
+    .whereIn('state', ['waiting', 'running'])
+    .whereNotExists(
+      knex('graphile_worker.jobs')
+        .whereRaw('jobs.id = imports.job_id')
+        .whereRaw('(jobs.locked_at IS NOT NULL OR jobs.attempts < jobs.max_attempts)')
+        .select(knex.raw('1')),
+    )
+    .patch({ state: 'failed', stage: 'Failed', error: SENTENCE })
+    .returning('*');
+  for (const { id, rigId } of abandoned) await announceImport(knex, { rigId, importId: id });
+}

@@ -1,0 +1,72 @@
+import { analyseLogWithSeries } from '@stillpier/analysis';
+import { GuideLogError } from '@stillpier/guide-log';
+import type { JobHelpers, Task } from 'graphile-worker';
+import type { Knex } from 'knex';
+import * as z from 'zod';
+import { RigModel } from '../rigs/rig-model';
+import { SetupModel } from '../setups/setup-model';
+import { describeRig } from './describe-rig';
+import { ImportTurn, TakenOverError } from './import-turn';
+import { readOriginal } from './read-original';
+import { storeAnalysis } from './store-analysis';
+
+const payloadSchema = z.object({ importId: z.uuid() });
+
+/** Shares of the whole at which reading and analysing end; storing is the rest. */
+const READ_SHARE = 0.6;
+const ANALYSED_SHARE = 0.95;
+
+const NO_DATE =
+  'The log does not tell on which date it was written: give the time of its first frame in the column map (startTime).';
+const FAULT =
+  'The analysis of this file stopped with a fault of the program, three times; its log says which.';
+
+/** A log that was read and still cannot become nights: the message is for people. */
+class UnusableLogError extends Error {}
+
+/** The `read-log` task of the queue: from an original to runs, series, nights and the document. */
+export function readLogTask(knex: Knex, log: (message: string, error: unknown) => void): Task {
+  return async (payload, helpers) => {
+    const { importId } = payloadSchema.parse(payload);
+    const turn = await ImportTurn.begin(knex, importId, helpers.job);
+    if (!turn) return;
+    try {
+      await work(knex, turn, helpers);
+    } catch (error) {
+      if (error instanceof TakenOverError) return;
+      if (error instanceof GuideLogError || error instanceof UnusableLogError) {
+        await turn.fail(error.message); // another try would read the same bytes
+        return;
+      }
+      if (helpers.abortSignal.aborted) await turn.waitAgain('Waiting for its turn');
+      else if (turn.isLast) await turn.fail(FAULT);
+      else await turn.waitAgain('Waiting for another try');
+      log(`Import ${importId}, try ${turn.row.attempt}`, error);
+      throw error; // the queue counts it and comes again
+    }
+  };
+}
+
+async function work(knex: Knex, turn: ImportTurn, { abortSignal }: JobHelpers): Promise<void> {
+  const { rigId, setupId } = turn.row;
+  const rig = await RigModel.query(knex).findById(rigId);
+  if (!rig) throw new TakenOverError(`rig ${rigId} is gone`);
+  const setup = setupId === null ? undefined : await SetupModel.query(knex).findById(setupId);
+
+  const { frames, reading } = await readOriginal(
+    knex,
+    turn.row,
+    rig.site.timeZone,
+    async (share) => {
+      abortSignal.throwIfAborted();
+      await turn.report(share * READ_SHARE, 'Reading the lines');
+    },
+  );
+  if (frames.startEpochSeconds === null) throw new UnusableLogError(NO_DATE);
+
+  await turn.report(READ_SHARE, 'Analysing the runs');
+  const analysis = analyseLogWithSeries(frames, reading, describeRig(rig, setup ?? null), {});
+  abortSignal.throwIfAborted();
+  await turn.report(ANALYSED_SHARE, 'Keeping the results');
+  await storeAnalysis(knex, turn, { analysis, seeingFwhmArcsec: setup?.seeingFwhmArcsec ?? null });
+}

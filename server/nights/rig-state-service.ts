@@ -1,0 +1,49 @@
+import type { RigState } from '@stillpier/contract';
+import type { Knex } from 'knex';
+import { rigsOf } from '../rigs/rig-access';
+import { asNightSummary } from './night-answer';
+import { NightModel } from './night-model';
+import { sentenceOf } from './night-sentence';
+import { RunModel } from './run-model';
+
+const TREND_NIGHTS = 12;
+
+/** How each rig of an account stands after its last night: the rigs page. */
+export class RigStateService {
+  constructor(private readonly knex: Knex) {}
+
+  async list(accountId: string): Promise<RigState[]> {
+    const rigs = await rigsOf(this.knex, accountId).orderBy('rigs.createdAt').orderBy('rigs.id');
+    return Promise.all(rigs.map(({ id }) => this.stateOf(id)));
+  }
+
+  private async stateOf(rigId: string): Promise<RigState> {
+    const nights = NightModel.query(this.knex).where({ rigId });
+    const nightCount = await nights.clone().resultSize();
+    const latest = await nights.orderBy('date', 'desc').limit(TREND_NIGHTS);
+    const last = latest[0];
+    const longest = last && (await this.longestRun(rigId, last.date));
+    const summary = last ? asNightSummary(last) : null;
+    return {
+      rigId,
+      nightCount,
+      lastNight: summary,
+      sentence: summary ? sentenceOf(summary) : [{ text: 'No logs yet.', strong: false }],
+      footprint: longest?.run.footprint ?? null,
+      seeingFwhmArcsec: longest?.seeingFwhmArcsec ?? null,
+      imagingScaleArcsecPerPx: longest?.optics.imagingScaleArcsecPerPx ?? null,
+      totalRmsTrend: latest
+        .flatMap(({ date, totalRmsArcsec }) =>
+          totalRmsArcsec === null ? [] : [{ date, totalRmsArcsec }],
+        )
+        .reverse(),
+    };
+  }
+
+  private longestRun(rigId: string, night: string) {
+    return RunModel.query(this.knex)
+      .where({ rigId, night })
+      .orderBy('durationSeconds', 'desc')
+      .first();
+  }
+}

@@ -1,0 +1,39 @@
+import nodemailer from 'nodemailer';
+import { pino } from 'pino';
+import { readConfiguration } from './configuration';
+import { makeKnex } from './database/connection';
+import { REDACTED } from './http/redacted';
+import { startWorker } from './jobs/start-worker';
+import { taskList } from './jobs/task-list';
+import { onStop } from './lifecycle';
+import { senderOf } from './mail/send-mail-task';
+
+const SWEEP_MS = 1000;
+
+const { DATABASE_URL, SMTP_URL, PUBLIC_URL, MAIL_FROM, LOG_LEVEL } = readConfiguration(process.env);
+const logger = pino({ level: LOG_LEVEL, redact: REDACTED });
+const log = (message: string, error?: unknown): void => {
+  if (error === undefined) logger.warn(message);
+  else logger.error({ err: error }, message);
+};
+const knex = makeKnex(DATABASE_URL, 4);
+const mail = {
+  knex,
+  transport: nodemailer.createTransport(SMTP_URL),
+  publicUrl: PUBLIC_URL,
+  sender: senderOf(PUBLIC_URL, MAIL_FROM),
+};
+const worker = await startWorker({
+  databaseUrl: DATABASE_URL,
+  knex,
+  tasks: taskList({ mail, log }),
+  sweepMs: SWEEP_MS,
+  log,
+});
+logger.info('the worker is ready');
+process.send?.({ ready: true });
+
+onStop(async () => {
+  await worker.stop();
+  await knex.destroy();
+});
