@@ -1,5 +1,6 @@
 import { type SetAside } from '../analysis-document';
 import { at } from '../statistics/at';
+import { pick } from '../statistics/pick';
 import { findDithers } from './find-dithers';
 import { FRAME_STATES } from './log-frames';
 import { type RunSeries, SET_ASIDE_CODES } from './run-series';
@@ -69,13 +70,12 @@ function markShapedDithers(
   dec: Float64Array,
   guided: boolean,
 ): number[] {
-  const seen = Int32Array.from(ra.keys()).filter((i) => !Number.isNaN(at(ra, i) + at(dec, i)));
-  const only = (values: Float64Array): Float64Array =>
-    Float64Array.from(seen, (i) => at(values, i));
+  const seen: number[] = [];
+  for (let i = 0; i < ra.length; i++) if (!Number.isNaN(at(ra, i) + at(dec, i))) seen.push(i);
   const dithers = findDithers({
-    timeSeconds: only(timeSeconds),
-    ra: only(ra),
-    dec: only(dec),
+    timeSeconds: pick(timeSeconds, seen),
+    ra: pick(ra, seen),
+    dec: pick(dec, seen),
     guided,
   });
   return dithers.map(({ jump, settled }) => {

@@ -1,4 +1,5 @@
 import { at } from '../statistics/at';
+import { pick } from '../statistics/pick';
 import { type RunSeries } from './run-series';
 
 /** The frames of a run that count, n of them, in order. */
@@ -17,12 +18,10 @@ export function usedFrames(series: RunSeries): UsedFrames {
   const frame = new Int32Array(count);
   let place = 0;
   for (let i = 0; i < series.count; i++) if (at(series.setAside, i) === 0) frame[place++] = i;
-  const only = (values: Float64Array): Float64Array =>
-    Float64Array.from(frame, (i) => at(values, i));
   return {
     frame,
-    timeSeconds: only(series.timeSeconds),
-    raErrorArcsec: only(series.raErrorArcsec),
-    decErrorArcsec: only(series.decErrorArcsec),
+    timeSeconds: pick(series.timeSeconds, frame),
+    raErrorArcsec: pick(series.raErrorArcsec, frame),
+    decErrorArcsec: pick(series.decErrorArcsec, frame),
   };
 }

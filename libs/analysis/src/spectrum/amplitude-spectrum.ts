@@ -31,10 +31,13 @@ export function amplitudeSpectrum(count: number): {
       padded[i] = at(window, i) * (at(values, i) - intercept - slope * i);
     }
     const spectrum = transform(padded);
-    return Float64Array.from(
-      { length: size / 2 + 1 },
-      (_, k) => scale * Math.hypot(at(spectrum, 2 * k), at(spectrum, 2 * k + 1)),
-    );
+    const heights = new Float64Array(size / 2 + 1);
+    for (let k = 0; k < heights.length; k++) {
+      const real = at(spectrum, 2 * k);
+      const imaginary = at(spectrum, 2 * k + 1);
+      heights[k] = scale * Math.sqrt(real * real + imaginary * imaginary);
+    }
+    return heights;
   };
   return { size, amplitudes };
 }

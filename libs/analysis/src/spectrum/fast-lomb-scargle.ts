@@ -7,6 +7,8 @@ export interface FastLombScargle {
   /** Frequency k is k · step, k = 0 … count − 1. */
   readonly step: number;
   readonly count: number;
+  /** Highest power of a line of power 1 beyond its own resolution width: what the sampling makes of it elsewhere. */
+  readonly sidelobes: number;
   /** Variance that a sine of free mean explains at each frequency, in the unit of y²; 0 at k = 0. */
   readonly explained: (y: Float64Array) => Float64Array;
 }
@@ -15,6 +17,8 @@ export interface FastLombScargle {
 const OVERSAMPLING = 2;
 /** A sample is spread over this many grid cells to each side. */
 const REACH = 6;
+/** Grid cells in the shortest period. */
+const CELLS_A_PERIOD = 4;
 /** Sharpness of the Gaussian that spreads a sample, for cells of a quarter of the shortest period (Greengard & Lee). */
 const SHARPNESS = (0.75 * Math.PI) / REACH;
 const GAUSSIAN = Float64Array.from({ length: 2 * REACH }, (_, j) =>
@@ -34,13 +38,18 @@ const GAUSSIAN = Float64Array.from({ length: 2 * REACH }, (_, j) =>
 export function fastLombScargle(t: Float64Array, highest: number): FastLombScargle {
   const start = at(t, 0);
   const duration = at(t, t.length - 1) - start;
-  // The sums of cos² need twice the frequency: one size serves both, a cell being an eighth of the shortest period.
-  const cell = 1 / (8 * highest);
+  const cell = 1 / (CELLS_A_PERIOD * highest);
   const size = powerOfTwoFrom((OVERSAMPLING * duration) / cell + 2 * REACH);
   const step = 1 / (size * cell);
   const count = Math.floor(highest / step) + 1;
   const transform = gaussianTransform(t, start, cell, size);
-  const phases = transform(new Float64Array(t.length).fill(1), 2 * count - 1);
+  // The sums of cos² need twice the frequency, so half the cell.
+  const phases = gaussianTransform(
+    t,
+    start,
+    cell / 2,
+    2 * size,
+  )(new Float64Array(t.length).fill(1), 2 * count - 1);
 
   const explained = (y: Float64Array): Float64Array => {
     const yMean = mean(y);
@@ -61,7 +70,16 @@ export function fastLombScargle(t: Float64Array, highest: number): FastLombScarg
     }
     return variances;
   };
-  return { step, count, explained };
+  return { step, count, sidelobes: highestSidelobe(phases, duration * step), explained };
+}
+
+/** Of the sampling's own transform, beyond frequency 1 / duration; `cycles` is a grid step in that unit. */
+function highestSidelobe(phases: Float64Array, cycles: number): number {
+  let highest = 0;
+  for (let k = Math.ceil(1 / cycles); 2 * k < phases.length; k++) {
+    highest = Math.max(highest, at(phases, 2 * k) ** 2 + at(phases, 2 * k + 1) ** 2);
+  }
+  return highest;
 }
 
 /** Σ y exp(−2πi f (t − start)) / n at the first frequencies of the grid: real and imaginary parts in turn. */
@@ -78,8 +96,8 @@ function gaussianTransform(
     for (let i = 0; i < t.length; i++) spread(grid, (at(t, i) - start) / cell, at(y, i) / t.length);
     const spectrum = transform(grid);
     const sums = new Float64Array(2 * frequencies);
+    const width = Math.sqrt(SHARPNESS / Math.PI);
     for (let k = 0; k < frequencies; k++) {
-      const width = Math.sqrt(SHARPNESS / Math.PI);
       const undo = width * Math.exp(((Math.PI * k) / size) ** 2 / SHARPNESS);
       sums[2 * k] = undo * at(spectrum, 2 * k);
       sums[2 * k + 1] = undo * at(spectrum, 2 * k + 1);

@@ -1,6 +1,6 @@
 import { at } from '../statistics/at';
 import { localFalseAlarmProbability } from './false-alarm';
-import { type NoiseLevel, noiseLevel } from './noise-level';
+import { type LocalNoise, type NoiseLevel, noiseLevel } from './noise-level';
 import { type Periodogram } from './periodogram';
 import { amplitudeOf, type SharpLine, sharpenLine, sineAt } from './sharpen-line';
 
@@ -20,6 +20,8 @@ const FEWEST_TURNS = 2;
 const ROUNDS = 6;
 /** A line between two bins looks weaker on the grid than it is, by less than this in power. */
 const BETWEEN_BINS = 1.25;
+/** Under so many times the noise level nothing is a line, however few the chances. */
+const FEWEST_LEVELS = 5;
 /** Below this part of the highest power there is only the rounding of the arithmetic. */
 const ROUNDING = 1e-12;
 
@@ -51,18 +53,17 @@ export function findLines(
       add(left, timeSeconds, line, -1);
       lines.push(line);
     }
-    sharpenTogether(spectrum, timeSeconds, left, lines);
     power = spectrum.squaredAmplitudes(left);
     noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
   }
+  sharpenTogether(spectrum, timeSeconds, left, lines);
   return lines
     .map((line) => ({
       periodSeconds: 1 / line.frequency,
       amplitude: amplitudeOf(line),
       falseAlarmProbability: falseAlarm(
         spectrum,
-        noise,
-        line.frequency / spectrum.stepHz,
+        noise(line.frequency / spectrum.stepHz),
         amplitudeOf(line) ** 2,
       ),
     }))
@@ -81,14 +82,8 @@ function firstBin({ resolutionHz, stepHz }: Periodogram): number {
   return Math.max(1, Math.ceil((FEWEST_TURNS * resolutionHz) / stepHz));
 }
 
-function falseAlarm(
-  { trials }: Periodogram,
-  { level, bins }: NoiseLevel,
-  bin: number,
-  power: number,
-): number {
-  const nearest = Math.max(0, Math.min(level.length - 1, Math.round(bin)));
-  return localFalseAlarmProbability(power / at(level, nearest), at(bins, nearest), trials);
+function falseAlarm({ trials }: Periodogram, { level, bins }: LocalNoise, power: number): number {
+  return localFalseAlarmProbability(power / level, bins, trials);
 }
 
 /** Frequencies of new local maxima that may be lines, strongest first, apart from each other and from known lines. */
@@ -103,7 +98,10 @@ function candidates(
   for (let k = firstBin(spectrum); k < power.length - 1; k++) {
     const here = at(power, k);
     if (here < at(power, k - 1) || here < at(power, k + 1)) continue;
-    if (falseAlarm(spectrum, noise, k, BETWEEN_BINS * here) >= LARGEST_FALSE_ALARM) continue;
+    const around = noise(k);
+    // The quick test saves the exact probability for nearly all maxima.
+    if (here < FEWEST_LEVELS * around.level) continue;
+    if (falseAlarm(spectrum, around, BETWEEN_BINS * here) >= LARGEST_FALSE_ALARM) continue;
     maxima.push({ frequency: (k + offBin(power, k)) * stepHz, power: here });
   }
   maxima.sort((a, b) => b.power - a.power);

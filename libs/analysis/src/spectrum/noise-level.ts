@@ -1,12 +1,15 @@
 import { at } from '../statistics/at';
 
-/** Noise around each frequency of a power spectrum. */
-export interface NoiseLevel {
-  /** Mean noise power at each bin of the spectrum. */
-  readonly level: Float64Array;
-  /** How many independent bins the level at a bin is worth. */
-  readonly bins: Float64Array;
+/** Noise around a frequency of a power spectrum. */
+export interface LocalNoise {
+  /** Mean noise power. */
+  readonly level: number;
+  /** How many independent bins the level is worth. */
+  readonly bins: number;
 }
+
+/** The noise at any bin, whole or not, from the first one that was looked at. */
+export type NoiseLevel = (bin: number) => LocalNoise;
 
 /** The neighbourhood reaches from f / REACH to f · REACH, */
 const REACH = 1.6;
@@ -27,15 +30,20 @@ const BELOW = Math.log(0.01);
 const STEEPEST = 3;
 
 interface Node {
-  readonly logFrequency: number;
   readonly logLevel: number;
   readonly bins: number;
+}
+
+/** Logarithms of frequency (in bins) and power at independent bins. */
+interface LogSpectrum {
+  readonly x: Float64Array;
+  readonly y: Float64Array;
 }
 
 /**
  * Level of the noise in a power spectrum, frequency by frequency: a straight line in log power against log frequency
  * through the neighbourhood, lines left out. A red spectrum, or one that a guider has bent, then gives no peaks of
- * its own, since each bin is held against its neighbours and not against the mean of all. O(bins · log bins).
+ * its own, since each bin is held against its neighbours and not against the mean of all. O(bins).
  *
  * @param power Power at bins 0 … n − 1 of an even grid.
  * @param first First bin that is looked at, above 0.
@@ -48,92 +56,97 @@ export function noiseLevel(
   stride: number,
   floor: number,
 ): NoiseLevel {
-  const logPower = power.map((value) => Math.log(Math.max(value, floor)));
-  const nodes: Node[] = [];
   const last = power.length - 1;
-  const factor = 2 ** (1 / NODES_PER_OCTAVE);
-  for (let bin = first; bin < last * factor; bin *= factor) {
-    nodes.push(levelAt(logPower, Math.min(bin, last), first, stride));
+  const count = Math.max(0, Math.floor((last - first) / stride) + 1);
+  const x = new Float64Array(count);
+  const y = new Float64Array(count);
+  for (let j = 0; j < count; j++) {
+    x[j] = Math.log(first + j * stride);
+    y[j] = Math.log(Math.max(at(power, first + j * stride), floor));
   }
-  const level = new Float64Array(power.length).fill(Infinity);
-  const bins = new Float64Array(power.length).fill(1);
-  let segment = 0;
-  for (let k = first; k <= last; k++) {
-    const logFrequency = Math.log(k);
-    while (segment < nodes.length - 2 && logFrequency > (nodes[segment + 1]?.logFrequency ?? 0)) {
-      segment++;
-    }
-    const left = nodes[segment];
+  const nodes: Node[] = [];
+  const spacing = Math.LN2 / NODES_PER_OCTAVE;
+  const start = Math.log(first);
+  for (let n = 0; n === 0 || start + (n - 1) * spacing < Math.log(last); n++) {
+    nodes.push(nodeAt({ x, y }, start + n * spacing, stride));
+  }
+  return (bin) => {
+    const place = Math.max(0, (Math.log(bin) - start) / spacing);
+    const segment = Math.min(Math.floor(place), nodes.length - 1);
+    const left = nodes[segment] ?? NO_NOISE_SEEN;
     const right = nodes[segment + 1] ?? left;
-    if (left === undefined || right === undefined) continue;
-    const width = right.logFrequency - left.logFrequency;
-    const part = width > 0 ? (logFrequency - left.logFrequency) / width : 0;
-    level[k] = Math.exp(left.logLevel + part * (right.logLevel - left.logLevel));
-    bins[k] = left.bins + part * (right.bins - left.bins);
-  }
-  return { level, bins };
-}
-
-function levelAt(logPower: Float64Array, bin: number, first: number, stride: number): Node {
-  const last = logPower.length - 1;
-  let from = Math.max(first, Math.ceil(bin / REACH));
-  let to = Math.min(last, Math.floor(bin * REACH));
-  const missing = FEWEST * stride - (to - from);
-  if (missing > 0) {
-    from = Math.max(first, from - Math.ceil(missing / 2));
-    to = Math.min(last, from + FEWEST * stride);
-    from = Math.max(first, Math.min(from, to - FEWEST * stride));
-  }
-  const logFrequency = Math.log(bin);
-  // The first fit has the lines in it: a second and third leave out what stands apart from the one before.
-  let fit = localLine(logPower, from, to, stride, logFrequency, () => true);
-  const { count, leverage } = fit;
-  for (let round = 0; round < 3; round++) {
-    const before = fit;
-    const trimmed = localLine(logPower, from, to, stride, logFrequency, (x, y) => {
-      const over = y - (before.value + before.slope * (x - logFrequency)) + LOG_MEAN;
-      return over < ABOVE && over > BELOW;
-    });
-    // Where most bins stand apart there is no noise to see, only the skirts of strong lines.
-    if (trimmed.count < count / 2) break;
-    fit = trimmed;
-  }
-  return {
-    logFrequency,
-    logLevel: fit.value - LOG_MEAN,
-    bins: 1 / (LOG_VARIANCE * leverage),
+    const part = Math.min(1, place - segment);
+    return {
+      level: Math.exp(left.logLevel + part * (right.logLevel - left.logLevel)),
+      bins: left.bins + part * (right.bins - left.bins),
+    };
   };
 }
 
-/** Least-squares line through kept (log k, log power), told at x₀: value, slope and leverage (variance / variance of one). */
+const NO_NOISE_SEEN: Node = { logLevel: Infinity, bins: 1 };
+
+function nodeAt(spectrum: LogSpectrum, logBin: number, stride: number): Node {
+  const { x } = spectrum;
+  const firstBin = Math.exp(at(x, 0));
+  const place = (reach: number): number => (Math.exp(logBin) * reach - firstBin) / stride;
+  let from = Math.max(0, Math.ceil(place(1 / REACH)));
+  let to = Math.min(x.length, Math.floor(place(REACH)) + 1);
+  const missing = FEWEST - (to - from);
+  if (missing > 0) {
+    from = Math.max(0, from - Math.ceil(missing / 2));
+    to = Math.min(x.length, from + FEWEST);
+    from = Math.max(0, to - FEWEST);
+  }
+  // The first fit has the lines in it: those that follow leave out what stands apart from the one before.
+  let fit = localLine(spectrum, from, to, logBin, null);
+  if (fit === null) return NO_NOISE_SEEN;
+  const { count, leverage } = fit;
+  for (let round = 0; round < 3; round++) {
+    const trimmed = localLine(spectrum, from, to, logBin, fit);
+    // Where most bins stand apart there is no noise to see, only the skirts of strong lines.
+    if (trimmed === null || trimmed.count < count / 2) break;
+    fit = trimmed;
+  }
+  return { logLevel: fit.value - LOG_MEAN, bins: 1 / (LOG_VARIANCE * leverage) };
+}
+
+interface LocalLine {
+  /** Of the line at x₀. */
+  readonly value: number;
+  readonly slope: number;
+  /** Variance of `value` over the variance of one point. */
+  readonly leverage: number;
+  readonly count: number;
+}
+
+/** Least-squares line through the points from … to − 1 that lie near the fit before; null for fewer than 3. */
 function localLine(
-  logPower: Float64Array,
+  { x, y }: LogSpectrum,
   from: number,
   to: number,
-  stride: number,
   x0: number,
-  keeps: (x: number, y: number) => boolean,
-): { value: number; slope: number; leverage: number; count: number } {
+  before: LocalLine | null,
+): LocalLine | null {
   let n = 0;
   let sx = 0;
   let sy = 0;
   let sxx = 0;
   let sxy = 0;
-  for (let k = from; k <= to; k += stride) {
-    const x = Math.log(k);
-    const y = at(logPower, k);
-    if (!Number.isFinite(y) || !keeps(x, y)) continue;
-    const off = x - x0;
+  for (let j = from; j < to; j++) {
+    const off = at(x, j) - x0;
+    const height = at(y, j);
+    if (before !== null) {
+      const over = height - before.value - before.slope * off + LOG_MEAN;
+      if (over > ABOVE || over < BELOW) continue;
+    }
     n++;
     sx += off;
-    sy += y;
+    sy += height;
     sxx += off * off;
-    sxy += off * y;
+    sxy += off * height;
   }
   const spread = n * sxx - sx * sx;
-  if (n < 3 || spread <= 0) {
-    return { value: n > 0 ? sy / n : Infinity, slope: 0, leverage: 1 / Math.max(n, 1), count: n };
-  }
+  if (n < 3 || spread <= 0 || !Number.isFinite(sy)) return null;
   const slope = Math.max(-STEEPEST, Math.min(STEEPEST, (n * sxy - sx * sy) / spread));
   return {
     value: (sy - slope * sx) / n,

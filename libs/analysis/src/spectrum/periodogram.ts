@@ -28,8 +28,8 @@ const EVEN_WITHIN = 0.05;
 const HANN_SIDELOBES = 0.002;
 /** The highest frequency is at most so many times the number of frames over the duration. */
 const DENSEST = 4;
-/** Gaps and missing frames give a periodogram without window sidelobes of any height; above this part of the strongest line they are rare. */
-const GAPPED_SIDELOBES = 0.25;
+/** Room above the highest sidelobe of uneven sampling: two lines' sidelobes may add. */
+const SIDELOBE_ROOM = 1.5;
 
 /**
  * The periodogram that fits the times: FFT with a Hann window for even sampling without gaps, else the generalised
@@ -77,14 +77,14 @@ function lombScarglePeriodogram(timeSeconds: Float64Array, cadenceSeconds: numbe
   const duration = at(timeSeconds, timeSeconds.length - 1) - at(timeSeconds, 0);
   // Frames in bursts with long gaps between would need an endless grid for the Nyquist frequency of the bursts.
   const highest = Math.min(0.5 / cadenceSeconds, (DENSEST * timeSeconds.length) / duration);
-  const { step, explained } = fastLombScargle(timeSeconds, highest);
+  const { step, sidelobes, explained } = fastLombScargle(timeSeconds, highest);
   return {
     method: 'lomb-scargle',
     stepHz: step,
     resolutionHz: 1 / duration,
     stride: Math.round(1 / (duration * step)),
     trials: trialsUpTo(timeSeconds, highest),
-    sidelobes: GAPPED_SIDELOBES,
+    sidelobes: Math.min(1, SIDELOBE_ROOM * sidelobes),
     squaredAmplitudes: (values) => {
       const { intercept, slope } = linearTrend(timeSeconds, values);
       const left = values.map((value, i) => value - intercept - slope * at(timeSeconds, i));

@@ -12,6 +12,8 @@ export interface SharpLine {
 
 const PARAMETERS = 5;
 const STEPS = 3;
+/** Steps end when the frequency moves by less than this part of its reach. */
+const SETTLED = 1e-4;
 
 /**
  * One sine in a series by least squares with its frequency free: Gauss-Newton steps from a frequency that is known to
@@ -44,6 +46,7 @@ export function sharpenLine(
       cosine: cosine ?? 0,
       sine: sine ?? 0,
     };
+    if (step > 0 && Math.abs(turn ?? 0) < SETTLED * reach) break;
   }
   return line;
 }
@@ -58,57 +61,90 @@ export function amplitudeOf(line: SharpLine): number {
   return Math.hypot(line.cosine, line.sine);
 }
 
-/** Coefficients and the step in angular frequency; null when the samples do not tell them. */
+/**
+ * Coefficients and the step in angular frequency, from sums over 1, τ, cos, sin and the sine's slope in frequency;
+ * null when the samples do not tell them. The sums are plain variables and not a matrix: this is the hottest loop.
+ */
 function gaussNewton(
   t: Float64Array,
   y: Float64Array,
   line: SharpLine,
   turns: boolean,
 ): Float64Array | null {
-  const size = turns ? PARAMETERS : PARAMETERS - 1;
-  const normal = new Float64Array(size * size);
-  const right = new Float64Array(size);
-  const row = new Float64Array(size);
   const omega = 2 * Math.PI * line.frequency;
   const scale = Math.max(Math.abs(at(t, 0) - line.origin), Number.MIN_VALUE);
+  let u1 = 0;
+  let uu = 0;
+  let c1 = 0;
+  let cu = 0;
+  let cc = 0;
+  let s1 = 0;
+  let su = 0;
+  let sc = 0;
+  let ss = 0;
+  let d1 = 0;
+  let du = 0;
+  let dc = 0;
+  let ds = 0;
+  let dd = 0;
+  let v1 = 0;
+  let vu = 0;
+  let vc = 0;
+  let vs = 0;
+  let vd = 0;
   for (let i = 0; i < t.length; i++) {
     const time = at(t, i) - line.origin;
-    const cos = Math.cos(omega * time);
-    const sin = Math.sin(omega * time);
-    row[0] = 1;
-    row[1] = time / scale;
-    row[2] = cos;
-    row[3] = sin;
-    if (turns) row[4] = (time / scale) * (line.sine * cos - line.cosine * sin);
-    const value = at(y, i);
-    for (let p = 0; p < size; p++) {
-      const rp = at(row, p);
-      right[p] = at(right, p) + rp * value;
-      for (let q = 0; q <= p; q++)
-        normal[p * size + q] = at(normal, p * size + q) + rp * at(row, q);
-    }
+    const c = Math.cos(omega * time);
+    const s = Math.sin(omega * time);
+    const u = time / scale;
+    const d = u * (line.sine * c - line.cosine * s);
+    const v = at(y, i);
+    u1 += u;
+    uu += u * u;
+    c1 += c;
+    cu += c * u;
+    cc += c * c;
+    s1 += s;
+    su += s * u;
+    sc += s * c;
+    ss += s * s;
+    d1 += d;
+    du += d * u;
+    dc += d * c;
+    ds += d * s;
+    dd += d * d;
+    v1 += v;
+    vu += v * u;
+    vc += v * c;
+    vs += v * s;
+    vd += v * d;
   }
-  const solved = solveSymmetric(normal, right);
+  const size = turns ? PARAMETERS : PARAMETERS - 1;
+  const rows = [[t.length], [u1, uu], [c1, cu, cc], [s1, su, sc, ss], [d1, du, dc, ds, dd]];
+  const solved = solveSymmetric(rows.slice(0, size), [v1, vu, vc, vs, vd].slice(0, size));
   if (solved === null) return null;
   solved[1] = at(solved, 1) / scale;
   if (turns) solved[4] = at(solved, 4) / scale;
   return solved;
 }
 
-/** Cholesky solution of a positive definite system given by its lower half; null when it is not definite. */
-function solveSymmetric(lower: Float64Array, right: Float64Array): Float64Array | null {
+/** Cholesky solution of a positive definite system given by the rows of its lower half; null when it is not definite. */
+function solveSymmetric(
+  rows: readonly (readonly number[])[],
+  right: readonly number[],
+): Float64Array | null {
   const n = right.length;
-  const factor = lower.slice();
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j <= i; j++) {
-      let sum = at(factor, i * n + j);
+  const factor = new Float64Array(n * n);
+  for (const [i, row] of rows.entries()) {
+    for (const [j, value] of row.entries()) {
+      let sum = value;
       for (let k = 0; k < j; k++) sum -= at(factor, i * n + k) * at(factor, j * n + k);
       if (i !== j) factor[i * n + j] = sum / at(factor, j * n + j);
-      else if (sum > 1e-12 * at(lower, i * n + i)) factor[i * n + i] = Math.sqrt(sum);
+      else if (sum > 1e-12 * value) factor[i * n + i] = Math.sqrt(sum);
       else return null;
     }
   }
-  const solved = right.slice();
+  const solved = Float64Array.from(right);
   for (let i = 0; i < n; i++) {
     for (let k = 0; k < i; k++) solved[i] = at(solved, i) - at(factor, i * n + k) * at(solved, k);
     solved[i] = at(solved, i) / at(factor, i * n + i);

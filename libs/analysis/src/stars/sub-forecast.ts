@@ -2,6 +2,7 @@ import { type Subs } from '../analysis-document';
 import { type RunSeries, SET_ASIDE_CODES } from '../series/run-series';
 import { at } from '../statistics/at';
 import { covariance } from '../statistics/pearson';
+import { pick } from '../statistics/pick';
 import { type ErrorCovariance, starFootprint } from './footprint';
 
 /** A sub without frames for so long is not a sub: nobody knows what the star did. */
@@ -74,10 +75,8 @@ function cutSubs(series: RunSeries, lengthSeconds: number): number[][] {
  * (the sampling variances of a Gaussian's covariance).
  */
 function errorCovariance(series: RunSeries, frames: readonly number[]): ErrorCovariance {
-  const only = (values: Float64Array): Float64Array =>
-    Float64Array.from(frames, (i) => at(values, i));
-  const ra = only(series.raErrorArcsec);
-  const dec = only(series.decErrorArcsec);
+  const ra = pick(series.raErrorArcsec, frames);
+  const dec = pick(series.decErrorArcsec, frames);
   const east = covariance(ra, ra);
   const north = covariance(dec, dec);
   const cross = covariance(ra, dec);
