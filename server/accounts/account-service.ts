@@ -6,7 +6,7 @@ import type { SignedInAccount } from '../http/signed-in';
 import { enqueueMail } from '../mail/mail-queue';
 import { AccountModel } from './account-model';
 import { CONFIRM_HOURS, hoursFromNow, sha256Of } from './mail-token';
-import type { Passwords } from './password';
+import type { Passwords } from './passwords';
 import { PasswordResetModel } from './password-reset-model';
 import { SignUpModel } from './sign-up-model';
 

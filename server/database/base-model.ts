@@ -6,6 +6,6 @@ export class BaseModel extends Model {
   declare id: string;
 
   override $beforeInsert(): void {
-    this.id = (this.id as string | undefined) ?? randomUUID();
+    if (!Object.hasOwn(this, 'id')) this.id = randomUUID();
   }
 }
