@@ -1,5 +1,3 @@
-import { at } from '../statistics/at';
-
 export interface WhiteningInput {
   readonly timeSeconds: Float64Array;
   /** 1 where a frame counts, else 0. */
@@ -40,7 +38,7 @@ export class LevelWhitening {
         restart++;
         levelVariance = NaN;
       } else if (n > 0) {
-        levelVariance += walkPerSecond * (at(timeSeconds, n) - at(timeSeconds, n - 1));
+        levelVariance += walkPerSecond * ((timeSeconds[n] ?? NaN) - (timeSeconds[n - 1] ?? NaN));
       }
       if (used[n] !== 1) continue;
       if (Number.isNaN(levelVariance)) {
@@ -66,11 +64,11 @@ export class LevelWhitening {
   whiten(series: ArrayLike<number>, out: Float64Array): Float64Array {
     let level = 0;
     for (let n = 0; n < out.length; n++) {
-      const gain = at(this.gain, n);
-      const value = at(series, n);
+      const gain = this.gain[n] ?? NaN;
+      const value = series[n] ?? NaN;
       if (gain > 0) {
         const innovation = value - level;
-        out[n] = at(this.weight, n) * innovation;
+        out[n] = (this.weight[n] ?? NaN) * innovation;
         level += gain * innovation;
       } else {
         if (Number.isNaN(gain)) level = value;

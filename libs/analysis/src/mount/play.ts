@@ -1,5 +1,3 @@
-import { at } from '../statistics/at';
-
 /**
  * Play operator: where the driven side of a gap stands when the driver goes along its way. The driven side rests
  * inside the gap and is pushed only at its ends: after a reversal it stays until the gap is crossed.
@@ -20,9 +18,9 @@ export function playInto(
   lag: number,
   out: Float64Array,
 ): Float64Array {
-  let place = at(driver, 0) - lag;
+  let place = (driver[0] ?? NaN) - lag;
   for (let n = 0; n < out.length; n++) {
-    const front = at(driver, n);
+    const front = driver[n] ?? NaN;
     place = Math.min(Math.max(place, front - width), front);
     out[n] = place;
   }
