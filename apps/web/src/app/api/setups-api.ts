@@ -16,8 +16,18 @@ export class SetupsApi {
     });
   }
 
-  async one(rigId: string, setupId: string): Promise<Setup> {
-    return setupSchema.parse(await firstValueFrom(this.http.get(setupPaths.one(rigId, setupId))));
+  /** Nothing is asked for while `setupId` is undefined, which stands for a new setup. */
+  one(
+    rigId: Signal<string>,
+    setupId: Signal<string | undefined>,
+  ): HttpResourceRef<Setup | undefined> {
+    return httpResource(
+      () => {
+        const id = setupId();
+        return id === undefined ? undefined : setupPaths.one(rigId(), id);
+      },
+      { parse: (body) => setupSchema.parse(body) },
+    );
   }
 
   async create(rigId: string, body: CreateSetup): Promise<Setup> {
