@@ -6,14 +6,15 @@ import { withoutJumps } from './dither-offsets';
 import { describeLoop, loopGain } from './loop';
 import { fitMotion, type MotionFit } from './motion-fit';
 import { type FittedLine, sineInto } from './motion-line';
+import { summedBefore } from './motion-frames';
 import { type AxisMotion } from './mount-motion';
 import { fitPeriodicError, type WormFit } from './periodic-error';
+import { playInto } from './play';
 import {
   chooseResponse,
   describeResponse,
   estimateResponse,
   type EstimatedResponse,
-  expectedPerUnit,
 } from './response';
 import { secondDifferenceNoise, seeingFloor } from './seeing-floor';
 import { describeUncorrected, displacements, uncorrectedMotion } from './uncorrected';
@@ -27,8 +28,10 @@ export interface AxisInput {
   readonly correction: Float64Array;
   readonly sign: CorrectionSign | null;
   readonly guideRateSidereal: number | undefined;
-  /** cos(declination) in RA, 1 in Dec; null where it is not known. */
-  readonly skyPerAxisAngle: number | null;
+  /** What one unit of correction should do, arcsec on the sky; null where nothing tells. */
+  readonly expected: number | null;
+  /** Dec only: the gap in the commands, in units of the correction; 0 for none. */
+  readonly playWidth: number;
   /** RA only: look for a periodic error; the rig's worm period or null. */
   readonly worm: { readonly periodSeconds: number | null } | null;
 }
@@ -48,18 +51,21 @@ export interface MeasuredAxis {
 
 /** All measures of one axis that rest on its corrections. O(n log n). */
 export function measureAxis(input: AxisInput): MeasuredAxis {
-  const { run, errorArcsec, correction, sign } = input;
+  const { run, errorArcsec, correction, sign, expected } = input;
   const moves = correction.map((given) => given * (sign?.sign ?? 1));
+  const moved = input.playWidth > 0 ? throughPlay(moves, input.playWidth) : moves;
   const corrected = correction.some((given) => given !== 0);
-  const estimated = corrected && sign ? estimateResponse(input.frames, errorArcsec, moves) : null;
-  const { correctionUnit: unit } = run;
-  const expected = expectedPerUnit(unit, input.guideRateSidereal, input.skyPerAxisAngle);
-  const used = chooseResponse(expected, estimated);
+  const estimated = corrected && sign ? estimateResponse(input.frames, errorArcsec, moved) : null;
+  const answered = loopGain(loopFrames(input), moves, 0);
+  const used = chooseResponse(expected, estimated, answered?.gain ?? null);
   const known = !corrected || (sign !== null && used !== null);
-  const response = describeResponse(unit, expected, estimated, used);
+  const response = describeResponse(run.correctionUnit, expected, estimated, used);
   if (!known) return withoutMotion(input, response, estimated);
 
-  const displacement = used ? displacements(moves, used) : new Float64Array(run.count);
+  const displaced = (each: Float64Array) =>
+    used ? displacements(each, used) : new Float64Array(run.count);
+  const displacement = displaced(moved);
+  const command = displaced(moves);
   const jumpy = uncorrectedMotion(errorArcsec, displacement);
   const fit = fitMotion({
     frames: input.frames,
@@ -77,7 +83,7 @@ export function measureAxis(input: AxisInput): MeasuredAxis {
   const rest = motion.map((value, n) => value - (model.smooth[n] ?? 0));
   const floor = seeingFloor(rest, input.frames, fit.noise);
   const gain = corrected
-    ? loopGain(loopFrames(input), displacement, used?.relativeStandardError ?? 0)
+    ? loopGain(loopFrames(input), command, used?.relativeStandardError ?? 0)
     : null;
   const step = fit.noise * Math.sqrt(fit.walkPerSecond * run.cadenceSeconds);
   return {
@@ -85,6 +91,7 @@ export function measureAxis(input: AxisInput): MeasuredAxis {
       sign: sign?.sign ?? null,
       signFrom: sign?.from ?? null,
       responseUsed: used,
+      commandArcsec: command,
       displacementArcsec: displacement,
       uncorrectedArcsec: motion,
       smoothArcsec: model.smooth,
@@ -128,6 +135,13 @@ export function measureAxis(input: AxisInput): MeasuredAxis {
   };
 }
 
+/** What of each correction comes through the gap; the star stands in its middle at the start. */
+function throughPlay(moves: Float64Array, width: number): Float64Array {
+  const driver = summedBefore(moves);
+  const driven = playInto(driver, width, width / 2, new Float64Array(driver.length));
+  return moves.map((_, n) => (driven[n + 1] ?? driven[n] ?? 0) - (driven[n] ?? 0));
+}
+
 /** No uncorrected motion: what the error alone tells. */
 function withoutMotion(
   input: AxisInput,
@@ -142,6 +156,7 @@ function withoutMotion(
       sign: input.sign?.sign ?? null,
       signFrom: input.sign?.from ?? null,
       responseUsed: null,
+      commandArcsec: null,
       displacementArcsec: null,
       uncorrectedArcsec: null,
       smoothArcsec: null,
@@ -173,7 +188,7 @@ export function boundSentence(errorArcsec: Float64Array, frames: LevelFrames): s
   return `Without known corrections only an upper bound can be told: at most ${bound.toFixed(2)} arcsec.`;
 }
 
-function missingResponse({ sign, axis, skyPerAxisAngle, guideRateSidereal }: AxisInput): string {
+function missingResponse({ sign, axis, guideRateSidereal }: AxisInput): string {
   const name = axis === 'ra' ? 'RA' : 'Dec';
   if (sign === null) {
     return `The log does not tell clearly whether a ${name} correction of +1 moves the star towards +error, and no column map says so.`;
@@ -181,9 +196,7 @@ function missingResponse({ sign, axis, skyPerAxisAngle, guideRateSidereal }: Axi
   const rig =
     guideRateSidereal === undefined
       ? 'the rig tells no guide rate'
-      : skyPerAxisAngle === null
-        ? 'the declination is not known'
-        : 'the rig does not help';
+      : 'the declination is not known';
   return `The log does not tell the ${name} response well enough, and ${rig}.`;
 }
 

@@ -7,6 +7,8 @@ import { describeLoop } from './loop';
 import { boundSentence, measureAxis, type MeasuredAxis } from './measure-axis';
 import { motionFrames } from './motion-frames';
 import { type AxisMotion, type MountMotion } from './mount-motion';
+import { findDecPlay } from './dec-play';
+import { expectedPerUnit } from './response';
 import { describePeriodicError } from './periodic-error';
 
 const FEWEST_FRAMES = 30;
@@ -17,6 +19,7 @@ const NOTHING: AxisMotion = {
   sign: null,
   signFrom: null,
   responseUsed: null,
+  commandArcsec: null,
   displacementArcsec: null,
   uncorrectedArcsec: null,
   smoothArcsec: null,
@@ -53,28 +56,39 @@ export function measureMountMotion(run: RunSeries, rig: RigDescription): MountMo
     dec: correctionSignFromLog(frames.dec, run.decErrorArcsec, decCorrection),
   });
   const cosDeclination = cosineOf(run.declinationDegrees);
-  const common = { run, guideRateSidereal: rig.mount?.guideRateSidereal };
+  const guideRateSidereal = rig.mount?.guideRateSidereal;
   const ra = measureAxis({
-    ...common,
+    run,
+    guideRateSidereal,
     axis: 'ra',
     frames: frames.ra,
     errorArcsec: run.raErrorArcsec,
     correction: raCorrection,
     sign: signs.ra,
-    skyPerAxisAngle: cosDeclination,
+    expected: expectedPerUnit(run.correctionUnit, guideRateSidereal, cosDeclination),
+    playWidth: 0,
     worm: { periodSeconds: rigWormPeriodSeconds(rig) },
   });
+  const decExpected = expectedPerUnit(run.correctionUnit, guideRateSidereal, 1);
+  const decPlay = findDecPlay(run, decCorrection, {
+    sign: signs.dec,
+    ra: ra.motion.responseUsed,
+    cosDeclination,
+    expected: decExpected,
+  });
   const dec = measureAxis({
-    ...common,
+    run,
+    guideRateSidereal,
     axis: 'dec',
     frames: frames.dec,
     errorArcsec: run.decErrorArcsec,
     correction: decCorrection,
     sign: signs.dec,
-    skyPerAxisAngle: 1,
+    expected: decExpected,
+    playWidth: 'why' in decPlay.fit ? 0 : decPlay.fit.determined ? decPlay.widthUnits : 0,
     worm: null,
   });
-  return gathered(run, ra, dec, cosDeclination);
+  return gathered(run, ra, dec, cosDeclination, decPlay.fit);
 }
 
 /** The map's word, else the log's own, else that of the other axis. */
@@ -104,6 +118,7 @@ function gathered(
   ra: MeasuredAxis,
   dec: MeasuredAxis,
   cosDeclination: number | null,
+  decPlay: MountMotion['decPlay'],
 ): MountMotion {
   const { worm, wormMotion } = ra;
   const whyMissing = { ...keyed('ra', ra.why), ...keyed('dec', dec.why) };
@@ -129,6 +144,7 @@ function gathered(
     whyMissing,
     ra: ra.motion,
     dec: dec.motion,
+    decPlay,
   };
 }
 
@@ -165,5 +181,6 @@ function withoutCorrections(run: RunSeries, why: string): MountMotion {
     },
     ra: NOTHING,
     dec: NOTHING,
+    decPlay: { why },
   };
 }

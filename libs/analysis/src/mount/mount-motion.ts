@@ -4,6 +4,7 @@ import {
   type Response,
   type Uncorrected,
 } from '../analysis-document';
+import { type PlayFit } from './backlash';
 
 /** Response that the uncorrected motion rests on, in arcsec on the sky per unit of correction; magnitudes. */
 export interface UsedResponse {
@@ -28,7 +29,9 @@ export interface AxisMotion {
   readonly sign: 1 | -1 | null;
   readonly signFrom: 'map' | 'log' | null;
   readonly responseUsed: UsedResponse | null;
-  /** Displacement between frames n and n + 1 that the correction of frame n commands, towards +error positive. */
+  /** What the correction of frame n commands for the motion from n to n + 1, towards +error positive. */
+  readonly commandArcsec: Float64Array | null;
+  /** What it causes: the command, in Dec behind the gap of the gears where one is determined. */
   readonly displacementArcsec: Float64Array | null;
   /**
    * e[n] less all displacements before n, with dither jumps taken out; NaN where no star was measured.
@@ -57,4 +60,6 @@ export interface MountMotion {
   readonly whyMissing: Record<string, string>;
   readonly ra: AxisMotion;
   readonly dec: AxisMotion;
+  /** The Dec gap, from `fitBacklash` on the Dec commands; or why there is none. */
+  readonly decPlay: PlayFit | { readonly why: string };
 }

@@ -20,13 +20,14 @@ export interface EstimatedResponse {
 /** A relative standard error beyond this tells nothing. */
 const LARGEST_RELATIVE_ERROR = 0.2;
 const CONTRADICTION = 3;
+/** Of neighbouring frames' seeing: what a log may hold without showing it. */
+const SEEING_CORRELATION = 0.2;
 const FEWEST_A_DIRECTION = 20;
 
 /**
  * Response of one axis by a one-step prediction-error fit (`fitMotion`), both directions together with their difference.
  *
- * @param moves Displacements that the corrections command, in units of the correction, towards +error positive.
- * @param throughPlay The same after the gap of the gears, where there is one; else `moves` itself.
+ * @param moves Corrections in their unit, towards +error positive; behind a gap of the gears what comes through it.
  * @returns null with fewer than 20 corrections, or when the star does not follow them.
  */
 export function estimateResponse(
@@ -84,17 +85,19 @@ export function expectedPerUnit(
 
 /**
  * The response that the uncorrected motion rests on: the rig's, unless the log contradicts it by more than three
- * standard errors; else the log's; else null. A difference between the directions that the log shows beyond three
+ * standard errors; else the log's; else null. Seeing that is correlated from frame to frame, and gusts, make the log's
+ * response read low: in the loop's own terms a correlation ρ passes for a gain lower by ρ. A reading below the rig's
+ * contradicts it only by what ρ = 0.2 cannot explain. A difference between the directions that the log shows beyond three
  * standard errors is kept either way: it would add up to a drift.
+ *
+ * @param gainPerUnit Part of an error that a guider answers, in units of correction per arcsec; null where not known.
  */
 export function chooseResponse(
   expected: number | null,
   estimated: EstimatedResponse | null,
+  gainPerUnit: number | null,
 ): UsedResponse | null {
-  const contradicted =
-    expected !== null &&
-    estimated !== null &&
-    Math.abs(estimated.perUnit - expected) > CONTRADICTION * estimated.standardError;
+  const contradicted = expected !== null && contradicts(expected, estimated, gainPerUnit);
   const perUnit = expected === null || contradicted ? estimated?.perUnit : expected;
   if (perUnit === undefined) return null;
   const from = perUnit === expected ? 'rig' : 'log';
@@ -109,6 +112,18 @@ export function chooseResponse(
       from === 'rig' || estimated === null ? 0 : estimated.standardError / estimated.perUnit,
     from,
   };
+}
+
+function contradicts(
+  expected: number,
+  estimated: EstimatedResponse | null,
+  gainPerUnit: number | null,
+): boolean {
+  if (estimated === null) return false;
+  const allowed = CONTRADICTION * estimated.standardError;
+  const correlated = gainPerUnit === null ? 0 : SEEING_CORRELATION / gainPerUnit;
+  const excess = estimated.perUnit - expected;
+  return excess > allowed || excess < -allowed - correlated;
 }
 
 /** REPORT's Response: what the log tells, in arcsec per second of correction; corrections in arcsec have no seconds. */
