@@ -3,10 +3,10 @@ import { type LevelFrames, whitenedLeastSquares } from './whitened-least-squares
 /** Natural logarithms of the walk's variance a frame over the noise's: from a level that stands still to one that is all there is. */
 const LOWEST = Math.log(1e-8);
 const HIGHEST = Math.log(1e4);
-const COARSE_TRIALS = 12;
+const COARSE_TRIALS = 9;
 const COARSE_STEP = (HIGHEST - LOWEST) / COARSE_TRIALS;
-/** A fifth in the logarithm of a variance ratio changes no weight that matters. */
-const FINE_STEP = 0.2;
+/** A third in the logarithm of a variance ratio changes no weight that matters. */
+const FINE_STEP = 0.35;
 const GOLDEN = (Math.sqrt(5) - 1) / 2;
 /** So many frames tell the ratio well enough: on longer nights the middle of the run speaks for it. */
 const ENOUGH_FRAMES = 4096;

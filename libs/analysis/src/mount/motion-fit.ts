@@ -64,9 +64,12 @@ export function fitMotion(input: MotionFitInput): MotionFit {
   const span = (input.frames.timeSeconds.at(-1) ?? 0) - (input.frames.timeSeconds[0] ?? 0);
   let frames = input.frames;
   let lines: readonly FittedLine[] = input.startLines;
+  let walkPerSecond = 0;
+  let isNewModel = true;
   for (let pass = 1; ; pass++) {
     const { columns, places } = designMatrix(frames, commands, lines);
-    const walkPerSecond = likeliestWalk(frames, columns, series);
+    // Refining a frequency does not change how the rest wanders: search again only when there are new lines.
+    if (isNewModel) walkPerSecond = likeliestWalk(frames, columns, series);
     const fit = whitenedLeastSquares(frames, walkPerSecond, columns, series);
     const refined = lines.map((line, i) => lineFrom(line, fit, places[i] ?? 0, span));
     const moved = refined.some(
@@ -80,6 +83,7 @@ export function fitMotion(input: MotionFitInput): MotionFit {
       const solve = (walk: number) => whitenedLeastSquares(frames, walk, columns, series);
       return described(frames, walkPerSecond, fit, commands.length, lines, solve);
     }
+    isNewModel = pass === 1 || found.length > 0;
     frames = withoutBumps(input.frames, frames, fit.innovations);
   }
 }
