@@ -5,7 +5,7 @@ import { BaseModel } from '../database/base-model';
 /** A log file of a rig and what became of it. Its bytes are in `import_chunks`. */
 export class ImportModel extends BaseModel {
   static override readonly tableName = 'imports';
-  static override readonly jsonAttributes = ['map', 'nightDates', 'document'];
+  static override readonly jsonAttributes = ['map', 'document'];
   declare rigId: string;
   declare setupId: string | null;
   declare uploadedBy: string | null;
@@ -23,7 +23,6 @@ export class ImportModel extends BaseModel {
   declare lineCount: number | null;
   declare frameCount: number | null;
   declare refusedCount: number | null;
-  declare nightDates: string[];
   declare document: AnalysisDocument | null;
   declare analysisVersion: string | null;
   declare createdAt: Date;
@@ -48,7 +47,6 @@ export class ImportModel extends BaseModel {
           'lineCount',
           'frameCount',
           'refusedCount',
-          'nightDates',
           'createdAt',
         ].map((column) => `imports.${column}`),
       ),

@@ -54,7 +54,9 @@ export async function storeAnalysis(
         optics: document.optics,
         spectrum: spectrumOf(analysedRun),
       });
-      await RunSeriesModel.query(trx).insert(seriesOf(id, analysedRun));
+      for (const channel of seriesOf(id, analysedRun)) {
+        await RunSeriesModel.query(trx).insert(channel);
+      }
     }
     await recomputeNights(trx, rigId, nights);
   });

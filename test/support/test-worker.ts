@@ -1,0 +1,70 @@
+import { setTimeout as sleep } from 'node:timers/promises';
+import { importPaths, type LogImport, logImportSchema } from '@stillpier/contract';
+import { makeKnex } from '../../server/database/connection';
+import { startWorker } from '../../server/jobs/start-worker';
+import { taskList } from '../../server/jobs/task-list';
+import { type Agent, PUBLIC_URL, type TestApp } from './api-app';
+
+export interface TestWorker {
+  readonly logged: string[];
+  stop(): Promise<void>;
+}
+
+/** The real worker within the process of the spec; what it logs is kept. */
+export async function startTestWorker(app: TestApp): Promise<TestWorker> {
+  const logged: string[] = [];
+  const log = (message: string, error?: unknown): void => {
+    logged.push(error === undefined ? message : `${message}: ${String(error)}`);
+  };
+  const knex = makeKnex(app.databaseUrl, 4);
+  const transport = { sendMail: () => Promise.reject(new Error('this worker sends no mail')) };
+  const mail = { knex, transport, publicUrl: PUBLIC_URL, sender: 'nobody@stillpier.test' };
+  const worker = await startWorker({
+    databaseUrl: app.databaseUrl,
+    knex,
+    tasks: taskList({ mail, log }),
+    sweepMs: 200,
+    log,
+  });
+  return {
+    logged,
+    stop: async () => {
+      await worker.stop();
+      await knex.destroy();
+    },
+  };
+}
+
+/** Sends a file as a browser does; options go before it. */
+export function upload(
+  agent: Agent,
+  rigId: string,
+  name: string,
+  file: string | Buffer,
+  options?: object,
+) {
+  const request = agent.post(importPaths.all(rigId));
+  if (options) void request.field('options', JSON.stringify(options));
+  return request.attach('file', Buffer.from(file), name);
+}
+
+/** The import once it is done or failed. */
+export async function finished(agent: Agent, rigId: string, importId: string): Promise<LogImport> {
+  for (;;) {
+    const answer = await agent.get(importPaths.one(rigId, importId)).expect(200);
+    const now = logImportSchema.parse(answer.body);
+    if (now.state === 'done' || now.state === 'failed') return now;
+    await sleep(50);
+  }
+}
+
+export async function uploaded(
+  agent: Agent,
+  rigId: string,
+  name: string,
+  file: string | Buffer,
+  options?: object,
+) {
+  const answer = await upload(agent, rigId, name, file, options).expect(202);
+  return finished(agent, rigId, logImportSchema.parse(answer.body).id);
+}
