@@ -17,7 +17,11 @@ export const MOST_LINES = 12;
 /** A line must turn at least so often in the run: slower motion cannot be told from drift. */
 const FEWEST_TURNS = 2;
 /** Strong lines hide weak ones: search, take off what was found, search again, at most so often. */
-const ROUNDS = 6;
+const ROUNDS = 8;
+/** Lines found are fitted beside each other at most so often, */
+const SWEEPS = 12;
+/** or until none changes by more than this part of its amplitude or of a resolution width. */
+const AT_REST = 1e-4;
 /** A line between two bins looks weaker on the grid than it is, by less than this in power. */
 const BETWEEN_BINS = 1.25;
 /** Under so many times the noise level nothing is a line, however few the chances. */
@@ -40,32 +44,39 @@ export function findLines(
   values: Float64Array,
   squaredAmplitudes: Float64Array,
 ): FoundLine[] {
-  const lines: SharpLine[] = [];
+  let lines: SharpLine[] = [];
   const left = values.slice();
   let power = squaredAmplitudes;
   const floor = ROUNDING * power.reduce((most, value) => Math.max(most, value), 0);
   let noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
   for (let round = 0; round < ROUNDS; round++) {
-    const fresh = candidates(spectrum, power, noise, lines);
-    if (fresh.length === 0) break;
+    const certain = candidates(spectrum, power, noise, lines);
+    // A strong line of few turns raises the noise around itself: the highest maximum is tried all the same, and held
+    // against what is left without it.
+    const tried = certain.length === 0;
+    const fresh = tried ? highestMaximum(spectrum, power, noise) : certain;
+    if (fresh.length === 0 || lines.length >= MOST_LINES) break;
+    const before = lines.slice();
     for (const frequency of fresh) {
       const line = sharpenLine(timeSeconds, left, frequency, spectrum.resolutionHz / 2);
       add(left, timeSeconds, line, -1);
       lines.push(line);
     }
+    // What a first guess leaves beside a strong line must not pass for another.
+    sharpenTogether(spectrum, timeSeconds, left, lines);
     power = spectrum.squaredAmplitudes(left);
     noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
+    const last = lines.at(-1);
+    if (tried && last !== undefined && !stands(spectrum, noise, last)) {
+      lines = before;
+      break;
+    }
   }
-  sharpenTogether(spectrum, timeSeconds, left, lines);
   return lines
     .map((line) => ({
       periodSeconds: 1 / line.frequency,
       amplitude: amplitudeOf(line),
-      falseAlarmProbability: falseAlarm(
-        spectrum,
-        noise(line.frequency / spectrum.stepHz),
-        amplitudeOf(line) ** 2,
-      ),
+      falseAlarmProbability: lineFalseAlarm(spectrum, noise, line),
     }))
     .filter((line) => line.falseAlarmProbability < LARGEST_FALSE_ALARM)
     .sort((a, b) => b.amplitude - a.amplitude)
@@ -84,6 +95,26 @@ function firstBin({ resolutionHz, stepHz }: Periodogram): number {
 
 function falseAlarm({ trials }: Periodogram, { level, bins }: LocalNoise, power: number): number {
   return localFalseAlarmProbability(power / level, bins, trials);
+}
+
+function lineFalseAlarm(spectrum: Periodogram, noise: NoiseLevel, line: SharpLine): number {
+  const around = noise(line.frequency / spectrum.stepHz);
+  return falseAlarm(spectrum, around, amplitudeOf(line) ** 2);
+}
+
+function stands(spectrum: Periodogram, noise: NoiseLevel, line: SharpLine): boolean {
+  return lineFalseAlarm(spectrum, noise, line) < LARGEST_FALSE_ALARM;
+}
+
+/** The frequency of the highest local maximum as a list; none when it is no higher than noise goes. */
+function highestMaximum(spectrum: Periodogram, power: Float64Array, noise: NoiseLevel): number[] {
+  let best = 0;
+  for (let k = firstBin(spectrum); k < power.length - 1; k++) {
+    const isMaximum = at(power, k) >= at(power, k - 1) && at(power, k) >= at(power, k + 1);
+    if (isMaximum && (best === 0 || at(power, k) > at(power, best))) best = k;
+  }
+  if (best === 0 || at(power, best) < FEWEST_LEVELS * noise(best).level) return [];
+  return [(best + offBin(power, best)) * spectrum.stepHz];
 }
 
 /** Frequencies of new local maxima that may be lines, strongest first, apart from each other and from known lines. */
@@ -121,21 +152,28 @@ function offBin(power: Float64Array, k: number): number {
   return bend === 0 ? 0 : (at(power, k - 1) - at(power, k + 1)) / (2 * bend);
 }
 
-/** Fits each line again with the others taken off, the strongest first; changes `lines` and `left`. */
+/**
+ * Fits each line again with the others taken off, until none moves: lines of few turns hang on
+ * each other and on the trend. Changes `lines` and `left`.
+ */
 function sharpenTogether(
   { resolutionHz }: Periodogram,
   timeSeconds: Float64Array,
   left: Float64Array,
   lines: SharpLine[],
 ): void {
-  if (lines.length < 2) return;
-  lines.sort((a, b) => amplitudeOf(b) - amplitudeOf(a));
-  lines.forEach((line, i) => {
-    add(left, timeSeconds, line, 1);
-    const sharper = sharpenLine(timeSeconds, left, line.frequency, resolutionHz / 4);
-    add(left, timeSeconds, sharper, -1);
-    lines[i] = sharper;
-  });
+  for (let sweep = 0; sweep < SWEEPS && lines.length > 1; sweep++) {
+    let moved = 0;
+    lines.forEach((line, i) => {
+      add(left, timeSeconds, line, 1);
+      const sharper = sharpenLine(timeSeconds, left, line.frequency, resolutionHz / 4);
+      add(left, timeSeconds, sharper, -1);
+      lines[i] = sharper;
+      const grown = Math.abs(amplitudeOf(sharper) / amplitudeOf(line) - 1);
+      moved = Math.max(moved, grown, Math.abs(sharper.frequency - line.frequency) / resolutionHz);
+    });
+    if (moved < AT_REST) break;
+  }
 }
 
 function add(values: Float64Array, timeSeconds: Float64Array, line: SharpLine, sign: number): void {
