@@ -31,6 +31,9 @@ export const COLUMN_UNITS = [
   'ms',
   'degrees',
   'hours',
+  'E/W',
+  'N/S',
+  '+/-',
 ] as const;
 
 const columnSchema = z.strictObject({
@@ -43,7 +46,7 @@ export const columnMapSchema = z
   .strictObject({
     delimiter: z.enum([',', ';', '\t', '|', ' ']).optional(),
     decimal: z.enum(['.', ',']).optional(),
-    headerLine: z.int().min(1).optional().describe('1-based'),
+    headerLine: z.int().min(0).optional().describe('1-based; 0: the file has no header'),
     comment: z.string().min(1).max(10).optional(),
     columns: z
       .record(z.string(), columnSchema)

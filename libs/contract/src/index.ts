@@ -6,5 +6,6 @@ export * from './night';
 export * from './page';
 export * from './problem';
 export * from './rig';
+export * from './rig-description';
 export * from './saved-column-map';
 export * from './setup';
