@@ -36,6 +36,10 @@ export const routes: Routes = [
     children: [
       // Pages of a rig stand here; `rigs` below takes what is left.
       {
+        path: 'rigs/:rigId/nights',
+        loadChildren: () => import('./nights/nights-routes').then((m) => m.nightsRoutes),
+      },
+      {
         path: 'rigs',
         loadChildren: () => import('./rigs/rigs-routes').then((m) => m.rigsRoutes),
       },

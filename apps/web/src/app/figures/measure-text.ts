@@ -19,6 +19,11 @@ export function arcsecText(arcsec: number | null): string {
   return arcsec === null ? NO_VALUE : `${fixed(arcsec, decimalsFor(arcsec))}″`;
 }
 
+/** One decimal, as far as a drift can tell an angle of the mount. */
+export function arcminText(arcmin: number): string {
+  return `${fixed(arcmin, 1)}′`;
+}
+
 /** With its sign, for a reading on an axis that goes both ways. */
 export function signedArcsecText(arcsec: number): string {
   const text = arcsecText(arcsec);

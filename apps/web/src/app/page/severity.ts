@@ -22,7 +22,12 @@ export class Severity {
   /** What it is about: "Act: periodic error". */
   readonly about = input<string>();
 
+  /** In place of its word, where the words around the mark say it: "3 to act on". */
+  readonly words = input<string>();
+
   protected readonly text = computed(() => {
+    const words = this.words();
+    if (words !== undefined) return words;
     const about = this.about();
     return about === undefined ? WORDS[this.level()] : `${WORDS[this.level()]}: ${about}`;
   });

@@ -1,0 +1,61 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { importPaths, type Night } from '@stillpier/contract';
+import { countedText, countText } from '../figures/measure-text';
+import type { ShownRun } from './shown-run';
+
+const REASONS = ['dither', 'settling', 'star lost', 'by hand'] as const;
+const MOST_REFUSED_SHOWN = 20;
+
+/** What was read, what was refused and what was set aside. */
+@Component({
+  selector: 'app-reading-plate',
+  templateUrl: './reading-plate.html',
+  styleUrl: './reading-plate.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ReadingPlate {
+  readonly rigId = input.required<string>();
+  readonly logs = input.required<Night['logs']>();
+  readonly runs = input.required<readonly ShownRun[]>();
+
+  protected readonly files = computed(() =>
+    this.logs().map(({ importId, fileName, analysisVersion, reading }) => ({
+      importId,
+      fileName,
+      analysisVersion,
+      lines: countText(reading.lines),
+      frames: countText(reading.frames),
+      refusedCount: reading.refusedCount,
+      refusedText: countText(reading.refusedCount),
+      refused: reading.refused.slice(0, MOST_REFUSED_SHOWN).map(({ line, reason }) => ({
+        line: countText(line),
+        reason,
+      })),
+      further: reading.refusedCount - Math.min(reading.refused.length, MOST_REFUSED_SHOWN),
+      warnings: reading.warnings,
+      original: importPaths.original(this.rigId(), importId),
+      document: importPaths.document(this.rigId(), importId),
+    })),
+  );
+  protected readonly refusing = computed(() =>
+    this.files().filter((file) => file.refusedCount > 0),
+  );
+
+  protected readonly reasons = REASONS;
+  protected readonly aside = computed(() =>
+    this.runs().map(({ id, name, of: { run } }) => ({
+      id,
+      name,
+      frames: countText(run.frames),
+      used: countText(run.used),
+      counts: REASONS.map((reason) => {
+        const frames = run.setAside
+          .filter((stretch) => stretch.reason === reason)
+          .reduce((sum, stretch) => sum + stretch.frames, 0);
+        return frames === 0 ? '–' : countText(frames);
+      }),
+    })),
+  );
+
+  protected readonly lines = (count: number): string => countedText(count, 'line', 'lines');
+}

@@ -1,0 +1,42 @@
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import type { RunStretch } from '../api/run-stretch';
+import { arcsecText, countText } from '../figures/measure-text';
+import { TraceChart } from '../figures/trace-chart/trace-chart';
+import type { SecondsRange } from '../figures/trace-chart/trace-stretch';
+import { Failure } from '../page/failure';
+import { Waiting } from '../page/waiting';
+import { RunChips } from './run-chips';
+import { runTitle, type ShownRun } from './shown-run';
+
+/** The guide error of the chosen run over time. */
+@Component({
+  selector: 'app-trace-plate',
+  imports: [Failure, RunChips, TraceChart, Waiting],
+  templateUrl: './trace-plate.html',
+  styleUrl: './trace-plate.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class TracePlate {
+  readonly runs = input.required<readonly ShownRun[]>();
+  readonly chosen = input.required<ShownRun>();
+  readonly timeZone = input.required<string>();
+  readonly stretch = input.required<RunStretch | undefined>();
+  readonly error = input.required<unknown>();
+  readonly detail = input.required<RunStretch | null>();
+  readonly halfRangeArcsec = input.required<number>();
+  readonly choose = output<string>();
+  readonly stretchWanted = output<SecondsRange>();
+  readonly retry = output();
+
+  protected readonly title = computed(() => runTitle(this.chosen()));
+  protected readonly run = computed(() => this.chosen().of.run);
+  protected readonly aside = computed(() => {
+    const { frames, used } = this.run();
+    return `${countText(frames - used)} of ${countText(frames)}`;
+  });
+  protected readonly label = computed(() => {
+    const { ra, dec } = this.run();
+    const rms = `RA ${arcsecText(ra?.rmsArcsec ?? null)} and Dec ${arcsecText(dec?.rmsArcsec ?? null)} RMS`;
+    return `Guide error of ${this.title()}: ${rms}, ${this.aside()} frames set aside.`;
+  });
+}

@@ -1,0 +1,35 @@
+import type { NightSummary } from '@stillpier/contract';
+
+const COLUMNS: readonly [string, (night: NightSummary) => string | number | null][] = [
+  ['date', (night) => night.date],
+  ['targets', (night) => night.targets.join(' · ')],
+  ['runs', (night) => night.runCount],
+  ['guided_hours', (night) => night.guidedHours],
+  ['frames', (night) => night.frames],
+  ['frames_used', (night) => night.used],
+  ['ra_rms_arcsec', (night) => night.raRmsArcsec],
+  ['dec_rms_arcsec', (night) => night.decRmsArcsec],
+  ['total_rms_arcsec', (night) => night.totalRmsArcsec],
+  ['aspect', (night) => night.aspect],
+  ['position_angle_degrees', (night) => night.positionAngleDegrees],
+  ['kept_share', (night) => night.keptShare],
+  ['main_limit', (night) => night.mainLimit?.code ?? null],
+  ['severity', (night) => night.mainLimit?.severity ?? null],
+];
+
+/** The nights as they stand in the table, in full precision (RFC 4180). */
+export function nightsCsv(nights: readonly NightSummary[]): string {
+  const lines = [
+    COLUMNS.map(([head]) => head),
+    ...nights.map((night) => COLUMNS.map(([, value]) => cell(value(night)))),
+  ];
+  return lines.map((cells) => `${cells.join(',')}\r\n`).join('');
+}
+
+/** A leading sign that a spreadsheet takes for a formula is told apart by an apostrophe. */
+function cell(value: string | number | null): string {
+  if (value === null) return '';
+  if (typeof value === 'number') return String(value);
+  const safe = /^[=+\-@\t]/.test(value) ? `'${value}` : value;
+  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
+}
