@@ -19,10 +19,17 @@ export class Roundel {
   /** null: no pixel grid is drawn. */
   readonly imagingScaleArcsecPerPx = input.required<number | null>();
   readonly halfWidthArcsec = input.required<number>();
+  /** For lists: cropped to the rim, without lettering, and as wide as the place it stands in. */
+  readonly small = input(false);
 
   protected readonly sizePx = SIZE_PX;
   protected readonly centrePx = SIZE_PX / 2;
   protected readonly rimPx = RIM_PX;
+  protected readonly viewBox = computed(() => {
+    const marginPx = this.small() ? SIZE_PX / 2 - RIM_PX - 8 : 0;
+    const sidePx = SIZE_PX - 2 * marginPx;
+    return `${marginPx} ${marginPx} ${sidePx} ${sidePx}`;
+  });
   protected readonly clipId = `roundel-${nextId()}`;
   private readonly pxPerArcsec = computed(() => RIM_PX / this.halfWidthArcsec());
 
