@@ -3,7 +3,6 @@ import express, { type Express, Router } from 'express';
 import type { Knex } from 'knex';
 import type pg from 'pg';
 import type { Logger } from 'pino';
-import { pinoHttp } from 'pino-http';
 import { accountRoutes } from './accounts/account-routes';
 import { AccountService } from './accounts/account-service';
 import { Passwords } from './accounts/passwords';
@@ -18,6 +17,7 @@ import { errorHandler } from './http/error-handler';
 import { EventStreams } from './http/event-streams';
 import { healthRoutes } from './http/health-routes';
 import { type Allowances, Limits } from './http/limits';
+import { requestLog } from './http/request-log';
 import { sameOriginOnly } from './http/same-origin';
 import { securityHeaders } from './http/security-headers';
 import { type Authenticator, makeAuthenticator, sessionHandlers } from './http/session';
@@ -75,7 +75,7 @@ export function buildApp(parts: AppParts): App {
   app.disable('x-powered-by');
   app.set('trust proxy', configuration.TRUST_PROXY);
   app.set('query parser', 'simple'); // no nested objects in a query
-  app.use(pinoHttp({ logger, autoLogging: { ignore: ({ url }) => url === '/healthz' } }));
+  app.use(requestLog(logger));
   const isHttps = configuration.PUBLIC_URL.startsWith('https:');
   app.use(securityHeaders(isHttps));
   app.use(compression());

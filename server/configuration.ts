@@ -32,3 +32,15 @@ export function readConfiguration(environment: NodeJS.ProcessEnv): Configuration
   const faults = result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
   throw new ConfigurationError(`The environment is not complete. ${faults.join('; ')}.`);
 }
+
+/** The environment of this process; one that is not complete ends it with one sentence. */
+export function configurationOrExit(): Configuration {
+  try {
+    return readConfiguration(process.env);
+  } catch (error) {
+    // Whoever started the process can mend this, and a stack would only hide the sentence.
+    if (!(error instanceof ConfigurationError)) throw error;
+    console.error(error.message);
+    process.exit(1);
+  }
+}

@@ -2,18 +2,17 @@ import { createServer } from 'node:http';
 import path from 'node:path';
 import { pino } from 'pino';
 import { buildApp } from './app';
-import { readConfiguration } from './configuration';
+import { configurationOrExit } from './configuration';
 import { makeKnex, makePool } from './database/connection';
 import { NotifyHub } from './database/notify-hub';
 import { STANDARD_ALLOWANCES } from './http/limits';
-import { REDACTED } from './http/redacted';
 import { onStop } from './lifecycle';
 
 const PASSWORD_ROUNDS = 12;
 const CLOSE_TIMEOUT_MS = 5000;
 
-const configuration = readConfiguration(process.env);
-const logger = pino({ level: configuration.LOG_LEVEL, redact: REDACTED });
+const configuration = configurationOrExit();
+const logger = pino({ level: configuration.LOG_LEVEL });
 const knex = makeKnex(configuration.DATABASE_URL, 10);
 const pool = makePool(configuration.DATABASE_URL, 5);
 const hub = new NotifyHub(configuration.DATABASE_URL, 'imports');

@@ -1,17 +1,17 @@
 import nodemailer from 'nodemailer';
 import { pino } from 'pino';
-import { readConfiguration } from './configuration';
+import { configurationOrExit } from './configuration';
 import { makeKnex } from './database/connection';
-import { REDACTED } from './http/redacted';
 import { startWorker } from './jobs/start-worker';
 import { taskList } from './jobs/task-list';
 import { onStop } from './lifecycle';
 import { senderOf } from './mail/send-mail-task';
 
 const SWEEP_MS = 1000;
+const GRACE_MS = 2000;
 
-const { DATABASE_URL, SMTP_URL, PUBLIC_URL, MAIL_FROM, LOG_LEVEL } = readConfiguration(process.env);
-const logger = pino({ level: LOG_LEVEL, redact: REDACTED });
+const { DATABASE_URL, SMTP_URL, PUBLIC_URL, MAIL_FROM, LOG_LEVEL } = configurationOrExit();
+const logger = pino({ level: LOG_LEVEL });
 const log = (message: string, error?: unknown): void => {
   if (error === undefined) logger.warn(message);
   else logger.error({ err: error }, message);
@@ -28,6 +28,7 @@ const worker = await startWorker({
   knex,
   tasks: taskList({ mail, log }),
   sweepMs: SWEEP_MS,
+  graceMs: GRACE_MS,
   log,
 });
 logger.info('the worker is ready');

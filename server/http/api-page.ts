@@ -1,5 +1,5 @@
 import { html, Markup } from './html';
-import type { OpenApiDocument } from './openapi';
+import { type OpenApiDocument, PROBLEM_TYPE } from './openapi';
 import { describeSchema, type SchemaNode } from './schema-words';
 
 interface ApiContent {
@@ -59,7 +59,8 @@ export function writeApiPage(document: OpenApiDocument, nonce: string): string {
         <header><h1>The API of Stillpier</h1></header>
         <p>
           ${document.info.description ?? ''} The same as a document:
-          <a href="/api/v1/openapi.json">openapi.json</a>.
+          <a href="/api/v1/openapi.json">openapi.json</a>. Every refusal is a
+          <a href="#Problem">Problem</a>.
         </p>
         ${tags.map(
           (tag) =>
@@ -82,15 +83,28 @@ export function writeApiPage(document: OpenApiDocument, nonce: string): string {
 
 function writeOperation(title: string, operation: ApiOperation): Markup {
   const signedIn = (operation.security ?? []).length > 0;
+  const all = Object.entries(operation.responses);
+  const answers = all.filter(([, answer]) => !isProblem(answer));
+  const refusals = all
+    .filter(([, answer]) => isProblem(answer))
+    .map(([status, { description }]) => `${status} ${description}`);
   return html`<article>
     <h3><code>${title}</code></h3>
     <p>${operation.summary ?? ''}${signedIn ? ' (signed in)' : ''}</p>
     ${writeParameters(operation.parameters ?? [])}
     ${operation.requestBody ? [writeContent('Body', operation.requestBody)] : []}
-    ${Object.entries(operation.responses).map(([status, answer]) =>
-      writeContent(`${status} ${answer.description}`, answer),
-    )}
+    ${answers.map(([status, answer]) => writeContent(`${status} ${answer.description}`, answer))}
+    ${
+      refusals.length > 0
+        ? html`<h4>Refusals</h4>
+            <p>${refusals.join(', ')}</p>`
+        : ''
+    }
   </article>`;
+}
+
+function isProblem({ content }: ApiContent): boolean {
+  return content !== undefined && PROBLEM_TYPE in content;
 }
 
 function writeParameters(parameters: readonly ApiParameter[]): Markup {

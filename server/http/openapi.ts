@@ -11,6 +11,7 @@ import { SESSION_COOKIE } from './session';
 
 export type OpenApiDocument = ReturnType<OpenApiGeneratorV31['generateDocument']>;
 
+export const PROBLEM_TYPE = 'application/problem+json';
 const JSON_TYPE = 'application/json';
 
 /** The OpenAPI 3.1 document of these operations. */
@@ -60,7 +61,7 @@ function toResponse({ description, schema, contentType }: Answer): ResponseConfi
 }
 
 function toProblem(status: number): ResponseConfig {
-  const content = contentOf({ schema: problemSchema, contentType: 'application/problem+json' });
+  const content = contentOf({ schema: problemSchema, contentType: PROBLEM_TYPE });
   return { description: STATUS_CODES[status] ?? 'Refused', content };
 }
 
