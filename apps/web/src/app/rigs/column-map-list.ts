@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
-import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { type SavedColumnMap } from '@stillpier/contract';
 import { ColumnMapsApi } from '../api/column-maps-api';
@@ -11,7 +10,7 @@ import { Waiting } from '../page/waiting';
 /** How the rig's kinds of log are read, as saved while adding logs. */
 @Component({
   selector: 'app-column-map-list',
-  imports: [Failure, MatButton, Waiting],
+  imports: [Failure, Waiting],
   templateUrl: './column-map-list.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })

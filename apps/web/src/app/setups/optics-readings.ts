@@ -16,6 +16,9 @@ export interface Reading {
 }
 
 export interface OpticsReadings {
+  /** The answer of the page, in parts; its numbers are strong. */
+  readonly sentence: readonly { readonly text: string; readonly strong: boolean }[];
+  readonly scaleRatio: number | null;
   readonly imaging: readonly Reading[];
   readonly guiding: readonly Reading[];
   readonly sky: readonly Reading[];
@@ -34,6 +37,8 @@ export function opticsReadings(setup: SetupEntry): OpticsReadings {
     return { name, figure: null, meaning: optics.whyMissing[key] ?? '' };
   };
   return {
+    sentence: sentence(optics.scaleRatio),
+    scaleRatio: optics.scaleRatio,
     imaging: [
       read('Imaging scale', 'imagingScaleArcsecPerPx', imagingScale),
       read("Dawes' limit", 'dawesArcsec', dawes),
@@ -48,6 +53,25 @@ export function opticsReadings(setup: SetupEntry): OpticsReadings {
     ],
     sky: [read('Seeing disc', 'seeingSamplingPx', (px) => sampling(px, setup.imaging.sensor))],
   };
+}
+
+function sentence(ratio: number | null): OpticsReadings['sentence'] {
+  const plain = (text: string) => ({ text, strong: false });
+  if (ratio === null) {
+    const text =
+      'Two focal lengths and two pixel sizes tell how fine a guide error a setup can see.';
+    return [plain(text)];
+  }
+  const { seenErrorImagingPx, staysUnder } = guideScaleLimit(ratio, USUAL_CENTROID_FRACTION_PX);
+  return [
+    plain('This setup can see a guide error from '),
+    { text: `${ratioText(seenErrorImagingPx)} px`, strong: true },
+    plain(
+      staysUnder
+        ? ' of the imaging camera up, within the third of a pixel that is wanted.'
+        : ' of the imaging camera up; the third of a pixel that is wanted needs a finer guide scale.',
+    ),
+  ];
 }
 
 const perPx = (arcsec: number): string => `${arcsecText(arcsec)} per px`;

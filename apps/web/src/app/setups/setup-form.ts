@@ -17,21 +17,25 @@ import { Field } from '../form/field';
 import { FieldInput } from '../form/field-input';
 import { FormMessage } from '../form/form-message';
 import { FormSubmission } from '../form/form-submission';
+import { Emphasis } from '../page/emphasis';
 import { OpticsFields } from './optics-fields';
 import { OpticsNotes } from './optics-notes';
 import { opticsReadings } from './optics-readings';
+import { PixelFigure } from './pixel-figure';
 import { filterGroup, setupFormGroup, showSetup, USUAL_FILTERS } from './setup-form-group';
 
 /** Optics, cameras and filters of a setup, with what follows from them in the margin while typing. */
 @Component({
   selector: 'app-setup-form',
   imports: [
+    Emphasis,
     Field,
     FieldInput,
     FormMessage,
     MatButton,
     OpticsFields,
     OpticsNotes,
+    PixelFigure,
     ReactiveFormsModule,
   ],
   templateUrl: './setup-form.html',
@@ -41,6 +45,7 @@ export class SetupForm {
   private readonly setupsApi = inject(SetupsApi);
 
   readonly rigId = input.required<string>();
+  readonly rigName = input.required<string>();
   /** null for a new setup. */
   readonly setup = input.required<Setup | null>();
   readonly mayEdit = input.required<boolean>();
