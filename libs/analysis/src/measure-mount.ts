@@ -1,5 +1,8 @@
-import { type Run, type WhyMissing } from './analysis-document';
+import { type Backlash, type PolarAlignment, type Run, type WhyMissing } from './analysis-document';
 import { type GuidedRun } from './listed-run';
+import { measureMountMotion } from './mount/measure-mount-motion';
+import { type MountMotion } from './mount/mount-motion';
+import { polarAlignment } from './mount/polar-alignment';
 import { type RigDescription } from './rig-description';
 import { type RunSeries } from './series/run-series';
 
@@ -32,8 +35,75 @@ export interface MountMeasures {
 const NOT_COMPUTED = 'This is not computed by this version.';
 
 /** The mount measures and findings of all analysed runs of a log together: polar alignment needs them side by side. */
-export function measureMount(runs: readonly AnalysedRun[], _rig: RigDescription): MountMeasures[] {
-  return runs.map(() => unmeasured(NOT_COMPUTED));
+export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription): MountMeasures[] {
+  const motions = runs.map(({ series }) => measureMountMotion(series, rig));
+  const polar = polarAlignments(runs, motions, rig.site?.latitudeDegrees ?? null);
+  return motions.map((motion) => {
+    const alignment = polar.of.get(motion) ?? null;
+    const backlash = backlashOf(motion);
+    return {
+      measures: {
+        uncorrected: motion.uncorrected,
+        periodicError: motion.periodicError,
+        polarAlignment: alignment,
+        backlash,
+        response: motion.response,
+        loop: motion.loop,
+        seeingFloor: motion.seeingFloor,
+        budget: null,
+        findings: [],
+      },
+      whyMissing: {
+        ...motion.whyMissing,
+        ...(alignment === null
+          ? { polarAlignment: 'The drift of Dec without corrections is not known.' }
+          : polar.whyMissing),
+        ...('why' in motion.decPlay ? { backlash: motion.decPlay.why } : {}),
+        ...(backlash !== null && backlash.ms === null
+          ? { 'backlash.ms': 'The corrections are logged in arcseconds.' }
+          : {}),
+        budget: NOT_COMPUTED,
+      },
+      uncorrectedRaArcsec: motion.ra.uncorrectedArcsec,
+      uncorrectedDecArcsec: motion.dec.uncorrectedArcsec,
+    };
+  });
+}
+
+/** The document's part of the Dec gap. */
+function backlashOf({ decPlay }: MountMotion): Backlash | null {
+  if ('why' in decPlay) return null;
+  const { arcsec, ms, low, high, determined, reversals } = decPlay;
+  return { arcsec, ms, low, high, determined, reversals };
+}
+
+/** Polar alignment of the runs whose uncorrected Dec drift is known. */
+function polarAlignments(
+  runs: readonly AnalysedRun[],
+  motions: readonly MountMotion[],
+  latitudeDegrees: number | null,
+): { readonly of: Map<MountMotion, PolarAlignment>; readonly whyMissing: WhyMissing } {
+  const known = motions.flatMap((motion, i) => {
+    const dec = motion.uncorrected?.dec;
+    const series = runs[i]?.series;
+    return dec === undefined || series === undefined ? [] : [{ motion, dec, series }];
+  });
+  const { runs: alignments, whyMissing } = polarAlignment(
+    known.map(({ dec, series }) => ({
+      decDriftArcsecPerMinute: dec.driftArcsecPerMinute,
+      standardError: dec.driftStandardError,
+      hourAngleHours: series.hourAngleHours,
+      declinationDegrees: series.declinationDegrees,
+    })),
+    latitudeDegrees,
+  );
+  const of = new Map<MountMotion, PolarAlignment>();
+  known.forEach(({ motion }, i) => {
+    const alignment = alignments[i];
+    if (alignment !== undefined) of.set(motion, alignment);
+  });
+  const dotted = Object.entries(whyMissing).map(([key, why]) => [`polarAlignment.${key}`, why]);
+  return { of, whyMissing: Object.fromEntries(dotted) as WhyMissing };
 }
 
 /** No mount measures, and the one reason for it. */
