@@ -49,14 +49,21 @@ export interface MeasuredAxis {
   readonly why: Record<string, string>;
 }
 
+/** Guiders answer errors with gains around this: the response that makes it so is a fair guess where nothing else is known. */
+const USUAL_GAIN = 0.6;
+
 /** All measures of one axis that rest on its corrections. O(n log n). */
 export function measureAxis(input: AxisInput): MeasuredAxis {
   const { run, errorArcsec, correction, sign, expected } = input;
   const moves = correction.map((given) => given * (sign?.sign ?? 1));
   const moved = input.playWidth > 0 ? throughPlay(moves, input.playWidth) : moves;
   const corrected = correction.some((given) => given !== 0);
-  const estimated = corrected && sign ? estimateResponse(input.frames, errorArcsec, moved) : null;
   const answered = loopGain(loopFrames(input), moves, 0);
+  const guess = expected ?? (answered === null ? null : USUAL_GAIN / answered.gain);
+  const estimated =
+    sign !== null && guess !== null
+      ? estimateResponse(input.frames, errorArcsec, moved, guess)
+      : null;
   const used = chooseResponse(expected, estimated, answered?.gain ?? null);
   const known = !corrected || (sign !== null && used !== null);
   const response = describeResponse(run.correctionUnit, expected, estimated, used);

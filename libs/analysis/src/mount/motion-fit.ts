@@ -1,8 +1,13 @@
-import { robustSigma } from '../statistics/robust-sigma';
+import { withoutBumps } from './bumps-and-steps';
 import { innovationLines } from './innovation-lines';
 import { likeliestWalk } from './likeliest-walk';
 import { type FittedLine, lineColumns, lineFrom, newLine } from './motion-line';
-import { type LevelFrames, whitenedLeastSquares, type WhitenedFit } from './whitened-least-squares';
+import {
+  addScaled,
+  type LevelFrames,
+  whitenedLeastSquares,
+  type WhitenedFit,
+} from './whitened-least-squares';
 
 export interface MotionFitInput {
   readonly frames: LevelFrames;
@@ -35,18 +40,15 @@ const MOST_PASSES = 8;
 const MOST_LINES = 12;
 /** Two lines closer than this part of the resolution 1/span are one. */
 const ONE_LINE = 0.8;
+/** An amplitude below so many standard errors is no line. */
+const CREDIBLE_ERRORS = 4;
+const SLOWEST_TURNS = 1.2;
 /** A frequency that moves less than this part of the resolution has settled. */
 const SETTLED = 0.02;
 /** Step in the logarithm of the walk for its slopes. */
 const WALK_STEP = 0.5;
 /** Where the likelihood is flat the walk is next to nothing and moves nothing: no larger variance is needed. */
 const MOST_WALK_VARIANCE = 4;
-const BUMP_SIGMAS = 4.5;
-/** A gust has faded so many frames after its last bump. */
-const FADING_FRAMES = 2;
-/** So many bumps in a row, with the frames after them, are no bump but a step: the level starts anew. */
-const STEP_FRAMES = 3;
-
 /**
  * One-step prediction-error fit of the motion of one axis (SCIENCE 4):
  *
@@ -68,7 +70,6 @@ export function fitMotion(input: MotionFitInput): MotionFit {
   let isNewModel = true;
   for (let pass = 1; ; pass++) {
     const { columns, places } = designMatrix(frames, commands, lines);
-    // Refining a frequency does not change how the rest wanders: search again only when there are new lines.
     if (isNewModel) walkPerSecond = likeliestWalk(frames, columns, series);
     const fit = whitenedLeastSquares(frames, walkPerSecond, columns, series);
     const refined = lines.map((line, i) => lineFrom(line, fit, places[i] ?? 0, span));
@@ -77,15 +78,29 @@ export function fitMotion(input: MotionFitInput): MotionFit {
     );
     const unrefined = lines.some((line) => line.amplitude === 0);
     const found = pass < MOST_PASSES - 2 ? newLines(frames, fit, refined, span) : [];
-    lines = [...refined, ...found];
-    const last = pass >= MOST_PASSES || (found.length === 0 && !moved && !unrefined && pass > 1);
+    const credible = refined.filter((line) => isCredible(line, span));
+    lines = [...credible, ...found];
+    const last =
+      pass >= MOST_PASSES ||
+      (found.length === 0 &&
+        !moved &&
+        !unrefined &&
+        credible.length === refined.length &&
+        pass > 1);
     if (last) {
       const solve = (walk: number) => whitenedLeastSquares(frames, walk, columns, series);
       return described(frames, walkPerSecond, fit, commands.length, lines, solve);
     }
-    isNewModel = pass === 1 || found.length > 0;
-    frames = withoutBumps(input.frames, frames, fit.innovations);
+    isNewModel = pass === 1 || found.length > 0 || moved || unrefined;
+    frames = withoutBumps(input.frames, frames, fit.innovations, residualOf(series, columns, fit));
   }
+}
+
+/** A line that the rest of the fit has taken over, or one that went too slow to be told from drift, is given up. */
+function isCredible(line: FittedLine, span: number): boolean {
+  return (
+    line.amplitude > CREDIBLE_ERRORS * line.standardError && line.frequency * span > SLOWEST_TURNS
+  );
 }
 
 /** Commands, drift, then the lines; `places` tells where each line's columns begin. */
@@ -117,33 +132,16 @@ function newLines(
     .map(newLine);
 }
 
-/**
- * Leaves out frames whose innovation no noise explains and the two after each, in which a gust fades, so that a gust
- * does not pass for wandering. Frames left out four in a row because each was too far off are a step: the level
- * starts anew at the first of them, and all count again.
- */
-function withoutBumps(
-  given: LevelFrames,
-  frames: LevelFrames,
-  innovations: Float64Array,
-): LevelFrames {
-  const limit = BUMP_SIGMAS * robustSigma(innovations.filter((value) => value !== 0));
-  const used = Uint8Array.from(frames.used);
-  const restarts = new Set(frames.restartFrames);
-  let inARow = 0;
-  let fading = 0;
-  for (let n = 0; n < used.length; n++) {
-    if (given.used[n] !== 1) continue;
-    const isBump = Math.abs(innovations[n] ?? 0) > limit;
-    inARow = isBump || used[n] === 0 ? inARow + 1 : 0;
-    fading = isBump ? FADING_FRAMES : fading - 1;
-    if (isBump || fading >= 0) used[n] = 0;
-    if (inARow < STEP_FRAMES + FADING_FRAMES) continue;
-    restarts.add(n - inARow + 1);
-    for (let back = n - inARow + 1; back <= n; back++) used[back] = given.used[back] ?? 0;
-    [inARow, fading] = [0, 0];
-  }
-  return { ...frames, used, restartFrames: [...restarts].sort((a, b) => a - b) };
+function residualOf(
+  series: Float64Array,
+  columns: readonly Float64Array[],
+  fit: WhitenedFit,
+): Float64Array {
+  const residual = Float64Array.from(series);
+  columns.forEach((column, j) => {
+    addScaled(residual, column, -(fit.coefficients[j] ?? 0));
+  });
+  return residual;
 }
 
 function described(

@@ -1,6 +1,7 @@
 import { type Response } from '../analysis-document';
 import { SIDEREAL_RATE_ARCSEC_PER_SECOND } from '../spectrum/gear-periods';
 import { fitMotion, type MotionFit } from './motion-fit';
+import { type FittedLine } from './motion-line';
 import { type UsedResponse } from './mount-motion';
 import { type LevelFrames } from './whitened-least-squares';
 
@@ -28,12 +29,14 @@ const FEWEST_A_DIRECTION = 20;
  * Response of one axis by a one-step prediction-error fit (`fitMotion`), both directions together with their difference.
  *
  * @param moves Corrections in their unit, towards +error positive; behind a gap of the gears what comes through it.
+ * @param guessPerUnit Response within a factor of two or three, where the search begins.
  * @returns null with fewer than 20 corrections, or when the star does not follow them.
  */
 export function estimateResponse(
   frames: LevelFrames,
   errorArcsec: Float64Array,
   moves: Float64Array,
+  guessPerUnit: number,
 ): EstimatedResponse | null {
   const positive = moves.reduce((count, move) => count + (move > 0 ? 1 : 0), 0);
   const negative = moves.reduce((count, move) => count + (move < 0 ? 1 : 0), 0);
@@ -41,7 +44,8 @@ export function estimateResponse(
   const both = Math.min(positive, negative) >= FEWEST_A_DIRECTION;
   const commands = [summed(moves, (move) => move)];
   if (both) commands.push(summed(moves, Math.abs));
-  const fit = fitMotion({ frames, series: errorArcsec, commands, startLines: [] });
+  const startLines = linesAtGuess(frames, errorArcsec, moves, guessPerUnit);
+  const fit = fitMotion({ frames, series: errorArcsec, commands, startLines });
   const perUnit = fit.coefficients[0] ?? 0;
   const variance = fit.covariance[0] ?? 0;
   const differenceVariance = both ? (fit.covariance[3] ?? 0) : 0;
@@ -57,6 +61,21 @@ export function estimateResponse(
     ),
     fit,
   };
+}
+
+/**
+ * Lines of the motion by a rough response. Without them the fit may begin in a false optimum, where corrections do nothing
+ * and the mount hardly moves: a wrong response scales the lines, it does not move them.
+ */
+function linesAtGuess(
+  frames: LevelFrames,
+  errorArcsec: Float64Array,
+  moves: Float64Array,
+  guessPerUnit: number,
+): readonly FittedLine[] {
+  const moved = summed(moves, (move) => move * guessPerUnit);
+  const series = errorArcsec.map((error, n) => error - (moved[n] ?? 0));
+  return fitMotion({ frames, series, commands: [], startLines: [] }).lines;
 }
 
 function summed(moves: Float64Array, part: (move: number) => number): Float64Array {
