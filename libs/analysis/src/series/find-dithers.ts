@@ -85,6 +85,10 @@ function isKept({ ra, dec, guided }: DitherSearch, i: number): boolean {
   for (let j = i + 2; j <= last; j++) {
     if (along(j - 1, j) < -UNDOING_STEP) return false;
   }
+  // The way back from a spike or a gust is a jump as well, and stays where it leads.
+  for (let j = Math.max(1, i - KEPT_FRAMES); j < i; j++) {
+    if (along(j - 1, j) < -UNDOING_STEP) return false;
+  }
   return true;
 }
 

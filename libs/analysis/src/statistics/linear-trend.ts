@@ -56,30 +56,39 @@ const SLOPE_ERROR_BLOCKS = 24;
  * Standard error of a least-squares slope whose residuals are correlated from frame to frame, as guided errors are.
  * The residuals' moments are summed over consecutive blocks, and only blocks are taken to be independent:
  *
- *     slopeError² = m/(m − 2) · Σ_b (Σ_{i in b} (tᵢ − t̄) rᵢ)² / (Σ(tᵢ − t̄)²)²,   m blocks
+ *     slopeError² = (m − 1)/m · Σ_b (Σ_{i in b} (tᵢ − t̄) rᵢ / (1 − h_b))² / (Σ(tᵢ − t̄)²)²,   m blocks,
  *
- * Right for any correlation shorter than a block (a 24th of the series); it reads low where the residual wanders for
- * longer. O(n).
+ * where h_b, the block's leverage (its part of the samples and of Σ(tᵢ − t̄)²), gives back what the fitted line has
+ * taken from its residuals: nearly the jackknife over blocks. Right for any correlation shorter than a block (a 24th
+ * of the series); it reads low where the residual wanders for longer. O(n).
  *
  * @param t n times, ascending.
  * @param y n values.
  * @throws {SeriesError} as `linearTrend`, and `too-short` (n < 12).
- * @see W. K. Newey, K. D. West, Econometrica 55 (1987) 703, with blocks in place of a lag window.
+ * @see W. K. Newey, K. D. West, Econometrica 55 (1987) 703, with blocks in place of a lag window; J. G. MacKinnon,
+ *   H. White, J. Econometrics 29 (1985) 305 for the leverage.
  */
 export function correlatedSlopeError(t: ArrayLike<number>, y: ArrayLike<number>): number {
   requireSeries('correlatedSlopeError', y, 12);
   const { slope, intercept } = linearTrend(t, y);
   const blocks = Math.min(SLOPE_ERROR_BLOCKS, Math.floor(t.length / 3));
   const moments = new Float64Array(blocks);
+  const parts = new Float64Array(blocks);
+  const counts = new Float64Array(blocks);
   const tMean = mean(t);
   let tt = 0;
   for (let i = 0; i < t.length; i++) {
     const off = at(t, i) - tMean;
     const block = Math.floor((i * blocks) / t.length);
     moments[block] = at(moments, block) + off * (at(y, i) - intercept - slope * at(t, i));
+    parts[block] = at(parts, block) + off * off;
+    counts[block] = at(counts, block) + 1;
     tt += off * off;
   }
   let squares = 0;
-  for (const moment of moments) squares += moment * moment;
-  return Math.sqrt((squares * blocks) / (blocks - 2)) / tt;
+  for (let block = 0; block < blocks; block++) {
+    const leverage = at(counts, block) / t.length + at(parts, block) / tt;
+    squares += (at(moments, block) / (1 - leverage)) ** 2;
+  }
+  return Math.sqrt((squares * (blocks - 1)) / blocks) / tt;
 }
