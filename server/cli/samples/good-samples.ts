@@ -1,0 +1,308 @@
+import { gzipSync } from 'node:zlib';
+import {
+  type CsvDialect,
+  type NightScenario,
+  PLAIN_DIALECT,
+  plateScaleArcsecPerPx,
+  type RigDescription,
+  simulateNight,
+  toCsv,
+} from '@stillpier/analysis';
+import type { ColumnMap } from '@stillpier/guide-log';
+import {
+  countClaims,
+  decDriftClaim,
+  numberClaim,
+  rmsClaims,
+  seeingClaim,
+  setAsideClaims,
+  textClaim,
+  wormClaims,
+} from './night-claims';
+import { rewriteTable, withLines } from './rewrite-table';
+import type { GoodSample } from './sample';
+import {
+  CALM,
+  LATE,
+  POLAR_DRIFT,
+  STRAIN_WAVE,
+  THREE_TARGETS,
+  UNGUIDED,
+  WORM,
+} from './sample-scenarios';
+
+const ORCHARD_PIER: RigDescription = {
+  name: 'Orchard pier',
+  mount: { kind: 'worm', wormTeeth: 180, guideRateSidereal: 0.5 },
+  imaging: { focalLengthMm: 530, apertureMm: 106, pixelUm: 3.76, binning: 1, sensor: 'mono' },
+  filters: [
+    { name: 'H-alpha 7 nm', subSeconds: 600 },
+    { name: 'Luminance', subSeconds: 180 },
+  ],
+  guiding: { focalLengthMm: 200, apertureMm: 50, pixelUm: 3.75, binning: 1 },
+  seeingFwhmArcsec: 2.2,
+  subSeconds: 300,
+  keepAspect: 1.15,
+  site: { latitudeDegrees: 45, longitudeDegrees: -75, timeZone: 'America/Toronto' },
+};
+const GUIDE_SCALE = plateScaleArcsecPerPx(3.75, 1, 200);
+
+const NO_SKY: CsvDialect = { ...PLAIN_DIALECT, targets: false, sky: false };
+
+/** All good samples; every draw of the simulator is fixed by a seed. */
+export function goodSamples(): GoodSample[] {
+  return [
+    wormNight(),
+    polarDrift(),
+    guidePixels(),
+    ownHeaders(),
+    threeTargets(),
+    unguided(),
+    strainWave(),
+    roughEdges(),
+  ];
+}
+
+function sample(
+  scenario: NightScenario,
+  seed: number,
+  dialect: CsvDialect,
+): { night: GoodSample['night']; csv: string } {
+  const night = simulateNight(scenario, seed);
+  return { night, csv: toCsv(night.frames, dialect) };
+}
+
+function wormNight(): GoodSample {
+  const { night, csv } = sample(WORM, 101, { ...PLAIN_DIALECT, time: 'timestamp' });
+  return {
+    file: 'worm-night.csv',
+    shows:
+      'Three hours on one target with a worm that nobody has adjusted, and a gear stage of 132.6 s beside it. Commas, ISO times, all the columns that are recognised.',
+    night,
+    content: csv,
+    rig: {
+      ...ORCHARD_PIER,
+      mount: {
+        ...ORCHARD_PIER.mount,
+        gearStages: [{ name: 'transfer gear', periodSeconds: 132.6 }],
+      },
+    },
+    claims: [
+      textClaim('runs[0].start', 'start', '2026-03-15T01:12:00Z'),
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0),
+      ...wormClaims(WORM, 0),
+      seeingClaim(WORM, 0, 0.03),
+    ],
+  };
+}
+
+function polarDrift(): GoodSample {
+  const { night, csv } = sample(POLAR_DRIFT, 102, { ...PLAIN_DIALECT, delimiter: ';', decimal: ',' });
+  return {
+    file: 'polar-drift.csv',
+    shows:
+      'Two and a half hours with a polar axis that is nine arcminutes off: the guider works against a steady Dec drift. Semicolons, decimal commas, seconds since the start.',
+    night,
+    content: csv,
+    rig: ORCHARD_PIER,
+    claims: [
+      textClaim('reading.decimal', 'decimal sign', ','),
+      textClaim('runs[0].start', 'start', null),
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0),
+      decDriftClaim(night, 0),
+    ],
+  };
+}
+
+function guidePixels(): GoodSample {
+  const dialect = { ...NO_SKY, guidePixelArcsec: GUIDE_SCALE, decimals: 4, state: false };
+  const { night, csv } = sample(CALM, 103, dialect);
+  return {
+    file: 'guide-pixels.csv',
+    shows:
+      'Two calm hours written in pixels of the guide camera: without the guide scope of the rig there would be no arcseconds.',
+    night,
+    content: csv,
+    rig: ORCHARD_PIER,
+    claims: [
+      numberClaim('optics.guideScaleArcsecPerPx', 'guide scale', '″/px', 3.8675, 0.0001),
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0, 0.002),
+    ],
+  };
+}
+
+function ownHeaders(): GoodSample {
+  const dialect: CsvDialect = { ...NO_SKY, delimiter: '\t', time: 'timestamp' };
+  const { night, csv } = sample(LATE, 104, dialect);
+  const header = ['Clock', 'Off east', 'Off north', 'Pulse 1', 'Way 1', 'Pulse 2', 'Way 2', 'Phase'];
+  const letters = new Map([
+    ['guiding', 'G'],
+    ['dither', 'D'],
+    ['settling', 'S'],
+    ['star lost', 'L'],
+  ]);
+  const map: ColumnMap = {
+    delimiter: '\t',
+    columns: {
+      Clock: { role: 'time', unit: 'clock' },
+      'Off east': { role: 'raError', unit: 'arcsec' },
+      'Off north': { role: 'decError', unit: 'arcsec' },
+      'Pulse 1': { role: 'raCorrection', unit: 'ms' },
+      'Way 1': { role: 'raDirection' },
+      'Pulse 2': { role: 'decCorrection', unit: 'ms' },
+      'Way 2': { role: 'decDirection' },
+      Phase: { role: 'state' },
+    },
+    states: { G: 'guiding', D: 'dither', S: 'settling', L: 'star lost' },
+    correctionSign: 'same',
+    targetDeclinationDegrees: 20,
+    targetHourAngleHours: -1.5,
+    startTime: '2026-03-14T22:55:00-04:00',
+  };
+  return {
+    file: 'own-headers.tsv',
+    shows:
+      'Two hours around midnight under headers that are not recognised, with clock times, letters for directions and states: only the column map beside it tells what they are. Tabs.',
+    night,
+    content: rewriteTable(csv, '\t', header, ([time = '', ra = '', dec = '', ...rest]) => {
+      const [raPulse = '', decPulse = '', state = ''] = rest;
+      const pulses = [...unsigned(raPulse, 'E', 'W'), ...unsigned(decPulse, 'N', 'S')];
+      return [localClock(time), ra, dec, ...pulses, letters.get(state) ?? ''];
+    }),
+    rig: ORCHARD_PIER,
+    map,
+    claims: [
+      textClaim('runs[0].start', 'start', '2026-03-15T02:55:00Z'),
+      ...countClaims(night, 0),
+      ...setAsideClaims(night, 0),
+      ...rmsClaims(night, 0),
+    ],
+  };
+}
+
+function threeTargets(): GoodSample {
+  const { night, csv } = sample(THREE_TARGETS, 105, { ...PLAIN_DIALECT, time: 'timestamp' });
+  return {
+    file: 'three-targets.csv',
+    shows:
+      'Three targets in one night on both sides of the pier, dithers every ten minutes, clouds for four minutes in the second run.',
+    night,
+    content: csv,
+    rig: ORCHARD_PIER,
+    claims: [
+      numberClaim('runs.length', 'runs', '', 3, 0),
+      ...THREE_TARGETS.runs.flatMap(({ target }, run) => [
+        textClaim(`runs[${run}].target`, `target of run ${run + 1}`, target),
+        ...countClaims(night, run),
+        ...setAsideClaims(night, run),
+        ...rmsClaims(night, run),
+      ]),
+    ],
+  };
+}
+
+function unguided(): GoodSample {
+  const { night } = sample(UNGUIDED, 106, NO_SKY);
+  const frames = { ...night.frames, raCorrection: null, decCorrection: null };
+  const cosDeclination = Math.cos((30 * Math.PI) / 180);
+  return {
+    file: 'unguided-worm.csv',
+    shows:
+      'Two hours with the guider switched off and no corrections in the log, at declination 30°: the RA error is the worm itself.',
+    night,
+    content: toCsv(frames, { ...NO_SKY, state: false }),
+    rig: ORCHARD_PIER,
+    claims: [
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0),
+      textClaim('runs[0].spectrum.ra.peaks[0].label', 'strongest line in RA', 'worm'),
+      numberClaim('runs[0].spectrum.ra.peaks[0].periodSeconds', 'its period', 's', 478.69, 1),
+      numberClaim(
+        'runs[0].spectrum.ra.peaks[0].amplitudeArcsec',
+        'its amplitude on the sky, 7.5″ · cos 30°',
+        '″',
+        Number((7.5 * cosDeclination).toFixed(2)),
+        0.2,
+      ),
+    ],
+  };
+}
+
+function strainWave(): GoodSample {
+  const { night, csv } = sample(STRAIN_WAVE, 107, { ...NO_SKY, time: 'timestamp' });
+  return {
+    file: 'strain-wave.csv.gz',
+    shows:
+      'Three hours on a strain-wave drive with a period of 430.8 s and a frame every 1.5 s, give or take: uneven times. Compressed by gzip.',
+    night,
+    content: gzipSync(csv, { level: 9 }),
+    rig: {
+      ...ORCHARD_PIER,
+      name: 'Balcony',
+      mount: {
+        kind: 'strain wave',
+        gearStages: [{ name: 'wave generator', periodSeconds: 430.8 }],
+        guideRateSidereal: 0.5,
+      },
+    },
+    claims: [
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0),
+      textClaim('runs[0].spectrum.ra.method', 'spectrum by', 'lomb-scargle'),
+      textClaim('runs[0].spectrum.ra.peaks[0].label', 'strongest line in RA', 'wave generator'),
+    ],
+  };
+}
+
+function roughEdges(): GoodSample {
+  const { night, csv } = sample(CALM, 108, NO_SKY);
+  const content = withLines(csv, [
+    [1, 'North pier, guide log of the evening'],
+    [2, '# exposure 2 s, gain 20'],
+    [3, ''],
+    [100, '# a lorry went by'],
+    [200, '398,0.1'],
+    [300, '598,--,0.1,0,0,guiding'],
+    [400, '12,0.1,0.1,0,0,guiding'],
+    [500, 'guider restarted'],
+    [501, ''],
+  ]);
+  const refused = (at: number, line: number, reason: string) => [
+    numberClaim(`reading.refused[${at}].line`, `refused line ${at + 1}`, '', line, 0),
+    textClaim(`reading.refused[${at}].reason`, 'because', reason),
+  ];
+  return {
+    file: 'rough-edges.csv',
+    shows:
+      'A log with a title and comments above and between the frames, blank lines and four lines that cannot be read: they are refused, counted and listed, and the rest is analysed.',
+    night,
+    content,
+    rig: ORCHARD_PIER,
+    claims: [
+      numberClaim('reading.lines', 'lines', '', content.trimEnd().split('\n').length, 0),
+      numberClaim('reading.headerLine', 'header line', '', 4, 0),
+      numberClaim('reading.refusedCount', 'refused lines', '', 4, 0),
+      ...refused(0, 200, 'the line has 2 columns instead of 6'),
+      ...refused(1, 300, 'RA error is not a number: "--"'),
+      ...refused(2, 400, 'time goes back by 770 s'),
+      ...refused(3, 500, 'the line has 1 column instead of 6'),
+      ...countClaims(night, 0),
+      ...rmsClaims(night, 0),
+    ],
+  };
+}
+
+/** Time of day at four hours west of Greenwich, as a clock on the wall shows it. */
+function localClock(instant: string): string {
+  return new Date(Date.parse(instant) - 4 * 3_600_000).toISOString().slice(11, 21);
+}
+
+/** A signed pulse as its size and the letter of its direction. */
+function unsigned(pulse: string, positive: string, negative: string): [string, string] {
+  const value = Number(pulse);
+  if (value === 0) return ['0', ''];
+  return [String(Math.abs(value)), value > 0 ? positive : negative];
+}
