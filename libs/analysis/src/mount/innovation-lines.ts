@@ -4,7 +4,9 @@ import { type LevelFrames } from './whitened-least-squares';
 
 /** False-alarm probability over the whole spectrum below which a line counts (SCIENCE 3). */
 const FALSE_ALARM = 0.001;
-/** Independent frequencies on a grid padded twofold: a peak between two of them is not missed. */
+/** Zeros appended, so that a peak between two frequencies of the grid loses less than a fifth of its power. */
+const LEAST_PADDING = 1.5;
+/** Independent frequencies on such a grid. */
 const TRIALS_PER_FRAME = 1.25;
 /** Slower motions than so many turns a run cannot be told from drift. */
 const FEWEST_TURNS = 1.5;
@@ -28,7 +30,7 @@ export function innovationLines(frames: LevelFrames, innovations: Float64Array):
   if (present.length < 30 || span <= 0) return [];
   const sigma = robustSigma(present);
   if (!(sigma > 0)) return [];
-  const size = 2 ** Math.ceil(Math.log2(2 * (span / cadenceSeconds + 1)));
+  const size = 2 ** Math.ceil(Math.log2(LEAST_PADDING * (span / cadenceSeconds + 1)));
   const power = periodogram(frames, innovations, size, sigma * sigma * present.length);
   const threshold = Math.log((TRIALS_PER_FRAME * present.length) / FALSE_ALARM);
   const first = Math.ceil((FEWEST_TURNS / span) * size * cadenceSeconds);

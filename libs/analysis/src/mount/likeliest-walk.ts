@@ -9,13 +9,13 @@ const COARSE_STEP = (HIGHEST - LOWEST) / COARSE_TRIALS;
 const FINE_STEP = 0.35;
 const GOLDEN = (Math.sqrt(5) - 1) / 2;
 /** So many frames tell the ratio well enough: on longer nights the middle of the run speaks for it. */
-const ENOUGH_FRAMES = 4096;
+const ENOUGH_FRAMES = 2048;
 
 /**
  * How fast the level under a series wanders against its white noise, by maximum likelihood of the local-level model with
  * all columns fitted anew at every trial. Fitting them once would not do: inside a closed loop 'a still level and
  * corrections that do nothing' is a false optimum of its own. A coarse scan, then golden section; trials rest on
- * at most 4096 frames.
+ * at most 2048 frames.
  *
  * @param series NaN only where the frame is not used.
  * @returns `walkPerSecond` of `LevelWhitening`.

@@ -1,7 +1,6 @@
 import { type PeriodicError } from '../analysis-document';
 import { type MotionFit } from './motion-fit';
 import { amplitudeError, type FittedLine, lineColumns } from './motion-line';
-import { likeliestWalk } from './likeliest-walk';
 import { addScaled, whitenedLeastSquares, type WhitenedFit } from './whitened-least-squares';
 
 /** Periodic error as fitted: on the sky, before the turn into axis angles. */
@@ -15,8 +14,6 @@ export interface WormFit {
   readonly otherLines: readonly FittedLine[];
   readonly driftPerSecond: number;
   readonly driftStandardError: number;
-  readonly walkPerSecond: number;
-  readonly noise: number;
 }
 
 export const FEWEST_TURNS = 2;
@@ -28,7 +25,7 @@ const LONGEST_SECONDS = 1200;
 const FRAMES_A_PERIOD = 4;
 /** A line this close to T / k (relative), or closer than its own resolution, is the worm's. */
 const LABEL_WIDTH = 0.02;
-const PERIOD_REFINEMENTS = 4;
+const PERIOD_REFINEMENTS = 3;
 const CURVE_POINTS = 1440;
 
 /**
@@ -85,36 +82,33 @@ class WormDesign {
     private readonly span: number,
   ) {}
 
-  /** Gauss and Newton's steps in the period, with the harmonics that it then has. */
+  /** Gauss and Newton's steps in the period, with the harmonics that it shows at first. */
   refinedPeriod(start: number): number {
     const { timeSeconds } = this.motion.frames;
+    let { harmonics } = this.fit(start);
     let frequency = 1 / start;
     for (let step = 0; step < PERIOD_REFINEMENTS; step++) {
-      const { harmonics, walkPerSecond } = this.fit(1 / frequency);
       const byFrequency = new Float64Array(timeSeconds.length);
       harmonics.forEach((line, k) => {
         const derivative = lineColumns(timeSeconds, line)[2];
         if (derivative) addScaled(byFrequency, derivative, k + 1);
       });
-      const { columns } = this.columns(frequency, harmonics.length);
-      const fit = this.solve([...columns, byFrequency], walkPerSecond);
+      const { columns, first } = this.columns(frequency, harmonics.length);
+      const fit = this.solve([...columns, byFrequency]);
       frequency += fit.coefficients[columns.length] ?? 0;
+      harmonics = harmonics.map((_, k) => fittedLine((k + 1) * frequency, fit, first + 2 * k));
     }
     return 1 / frequency;
   }
 
   fit(period: number) {
-    const { cadenceSeconds, timeSeconds } = this.motion.frames;
-    const most = Math.min(
-      MOST_HARMONICS,
-      Math.max(1, Math.floor(period / (FRAMES_A_PERIOD * cadenceSeconds))),
-    );
+    const { cadenceSeconds } = this.motion.frames;
+    const sampled = Math.floor(period / (FRAMES_A_PERIOD * cadenceSeconds));
+    const most = Math.min(MOST_HARMONICS, Math.max(1, sampled));
     const all = this.columns(1 / period, most);
-    const walkPerSecond = likeliestWalk(this.motion.frames, all.columns, this.series);
-    const first = all.columns.length - 2 * most;
-    const orders = bestOrder(this.solve(all.columns, walkPerSecond), first, most);
-    const { columns, others } = this.columns(1 / period, orders);
-    const fit = this.solve(columns, walkPerSecond);
+    const orders = bestOrder(this.solve(all.columns), all.first, most);
+    const { columns, others, first } = this.columns(1 / period, orders);
+    const fit = this.solve(columns);
     const otherLines = others.map((line, i) => fittedLine(line.frequency, fit, 1 + 2 * i));
     return {
       harmonics: Array.from({ length: orders }, (_, k) =>
@@ -123,17 +117,15 @@ class WormDesign {
       otherLines: otherLines.sort((a, b) => b.amplitude - a.amplitude),
       driftPerSecond: fit.coefficients[0] ?? 0,
       driftStandardError: Math.sqrt(fit.covariance[0] ?? 0),
-      walkPerSecond,
-      noise: fit.noise,
-      count: timeSeconds.length,
     };
   }
 
-  private solve(columns: readonly Float64Array[], walkPerSecond: number): WhitenedFit {
-    return whitenedLeastSquares(this.motion.frames, walkPerSecond, columns, this.series);
+  private solve(columns: readonly Float64Array[]): WhitenedFit {
+    const { frames, walkPerSecond } = this.motion;
+    return whitenedLeastSquares(frames, walkPerSecond, columns, this.series);
   }
 
-  /** Drift, the other lines, then `orders` harmonics. */
+  /** Drift, the other lines, then from `first` on `orders` harmonics. */
   private columns(frequency: number, orders: number) {
     const { timeSeconds } = this.motion.frames;
     const others = this.motion.lines.filter((line) => !this.isHarmonic(line, frequency));
@@ -143,8 +135,9 @@ class WormDesign {
       columns.push(...lineColumns(timeSeconds, bare));
     };
     for (const line of others) add(line.frequency);
+    const first = columns.length;
     for (let order = 1; order <= orders; order++) add(order * frequency);
-    return { columns, others };
+    return { columns, others, first };
   }
 
   private isHarmonic(line: FittedLine, worm: number): boolean {
