@@ -11,8 +11,8 @@ app.put('/', (req, res) => {
 });
 app.use(errorHandler(pino({ level: 'silent' })));
 
-it('reads the version that it wrote', async () => {
-  const answer = await request(app).put('/').set('If-Match', versionTag(7)).expect(200);
+it.each([versionTag(7), `W/${versionTag(7)}`])('reads the version in %s', async (ifMatch) => {
+  const answer = await request(app).put('/').set('If-Match', ifMatch).expect(200);
   expect(answer.body).toEqual({ version: 7 });
 });
 
@@ -20,6 +20,6 @@ it('asks for the version when it is missing', async () => {
   await request(app).put('/').expect(428);
 });
 
-it.each(['7', '*', 'W/"7"', '"a"', '"7", "8"', ''])('refuses %s', async (ifMatch) => {
+it.each(['7', '*', '"a"', '"7", "8"', ''])('refuses %s', async (ifMatch) => {
   await request(app).put('/').set('If-Match', ifMatch).expect(400);
 });

@@ -16,7 +16,8 @@ export function requireVersion(req: Request): number {
     const detail = 'Send If-Match with the ETag of what you have read.';
     throw new AppError(428, 'version-required', detail);
   }
-  const version = /^"(\d{1,9})"$/.exec(header)?.[1];
+  // A proxy that compresses makes the tag weak; the version in it is still the one that was read.
+  const version = /^(?:W\/)?"(\d{1,9})"$/.exec(header)?.[1];
   if (version === undefined) throw badInput('If-Match needs one ETag of ours, such as "7".');
   return Number(version);
 }

@@ -87,13 +87,18 @@ export async function makeApp(options: TestAppOptions = {}): Promise<TestApp> {
       sendMail: (mail) => Promise.resolve(mails.push(mail)),
     },
   });
-  const mailsTo = async (email: string): Promise<OutgoingMail[]> => {
-    await runOnce({
+  const deliver = () =>
+    runOnce({
       pgPool: pool,
       taskList: { [SEND_MAIL_TASK]: sendMail },
       logger: new Logger(() => () => undefined),
       noHandleSignals: true,
     });
+  let delivered = Promise.resolve();
+  const mailsTo = async (email: string): Promise<OutgoingMail[]> => {
+    // One delivery after the other: a job that another one holds would not be waited for.
+    delivered = delivered.then(deliver);
+    await delivered;
     return mails.filter(({ to }) => to === email);
   };
   const tokenFor = async (email: string): Promise<string> => tokenIn((await mailsTo(email)).at(-1));
