@@ -28,7 +28,8 @@ async function bundle() {
     tsconfig: join(root, 'server/tsconfig.json'),
   });
   mkdirSync(folder, { recursive: true });
-  for (const old of readdirSync(folder)) rmSync(join(folder, old));
+  const bundles = readdirSync(folder).filter((name) => name.endsWith('.mjs'));
+  for (const old of bundles) rmSync(join(folder, old), { force: true });
   const unfinished = `${file}.${pid}`;
   writeFileSync(unfinished, outputFiles[0].contents);
   renameSync(unfinished, file);

@@ -1,9 +1,9 @@
 import { mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
-import { faultySamples } from './samples/faulty-samples';
-import { goodSamples } from './samples/good-samples';
-import type { ExpectedSamples } from './samples/sample';
-import { samplesReadme } from './samples/samples-readme';
+import { faultySamples } from './sample-logs/faulty-samples';
+import { goodSamples } from './sample-logs/good-samples';
+import type { ExpectedSamples } from './sample-logs/sample';
+import { samplesReadme } from './sample-logs/samples-readme';
 
 // Makes the folder `samples` anew: logs, their rigs and column maps, what must come out of them, and the README.
 

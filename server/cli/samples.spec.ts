@@ -3,8 +3,8 @@ import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import { describe, expect, it } from 'vitest';
 import { runAnalyse } from './analyse';
-import type { Claim, ExpectedSamples } from './samples/sample';
-import { samplesReadme } from './samples/samples-readme';
+import type { Claim, ExpectedSamples } from './sample-logs/sample';
+import { samplesReadme } from './sample-logs/samples-readme';
 
 const SAMPLES = 'samples';
 const expected = JSON.parse(

@@ -98,7 +98,11 @@ function wormNight(): GoodSample {
 }
 
 function polarDrift(): GoodSample {
-  const { night, csv } = sample(POLAR_DRIFT, 102, { ...PLAIN_DIALECT, delimiter: ';', decimal: ',' });
+  const { night, csv } = sample(POLAR_DRIFT, 102, {
+    ...PLAIN_DIALECT,
+    delimiter: ';',
+    decimal: ',',
+  });
   return {
     file: 'polar-drift.csv',
     shows:
@@ -137,7 +141,16 @@ function guidePixels(): GoodSample {
 function ownHeaders(): GoodSample {
   const dialect: CsvDialect = { ...NO_SKY, delimiter: '\t', time: 'timestamp' };
   const { night, csv } = sample(LATE, 104, dialect);
-  const header = ['Clock', 'Off east', 'Off north', 'Pulse 1', 'Way 1', 'Pulse 2', 'Way 2', 'Phase'];
+  const header = [
+    'Clock',
+    'Off east',
+    'Off north',
+    'Pulse 1',
+    'Way 1',
+    'Pulse 2',
+    'Way 2',
+    'Phase',
+  ];
   const letters = new Map([
     ['guiding', 'G'],
     ['dither', 'D'],

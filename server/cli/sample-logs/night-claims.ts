@@ -114,8 +114,7 @@ export function wormClaims({ drive }: NightScenario, run: number): Claim[] {
 /** Dec drift without a guider: the slope of the simulated motion. */
 export function decDriftClaim(night: SimulatedNight, run: number): Claim {
   const frames = framesOf(night, run);
-  const pick = (values: Float64Array) =>
-    Float64Array.from(frames, (frame) => values[frame] ?? NaN);
+  const pick = (values: Float64Array) => Float64Array.from(frames, (frame) => values[frame] ?? NaN);
   const trend = linearTrend(pick(night.frames.timeSeconds), pick(night.truth.dec.openLoopArcsec));
   const perMinute = trend.slope * 60;
   return {
