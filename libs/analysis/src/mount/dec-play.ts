@@ -32,9 +32,12 @@ const GUESS_PRIOR = 0.4;
  */
 export function findDecPlay(
   run: RunSeries,
-  decCorrection: Float64Array,
+  decCorrection: Float64Array | null,
   input: DecPlayInput,
 ): DecPlay {
+  if (decCorrection === null) {
+    return { fit: { why: 'The log has no Dec corrections.' }, widthUnits: 0 };
+  }
   const rate = knownRate(input, run.correctionUnit);
   if (input.sign === null || rate === null) {
     const why = 'The direction or the response of the Dec corrections is not known.';

@@ -4,9 +4,10 @@ import { rigWormPeriodSeconds } from '../spectrum/gear-periods';
 import { type CorrectionSign, correctionSignFromLog } from './correction-sign';
 import { foldedCurve } from './folded-curve';
 import { describeLoop } from './loop';
-import { boundSentence, measureAxis, type MeasuredAxis } from './measure-axis';
+import { boundSentence } from './axis-reasons';
+import { measureAxis, type MeasuredAxis } from './measure-axis';
 import { motionFrames } from './motion-frames';
-import { type AxisMotion, type MountMotion } from './mount-motion';
+import { type MountMotion, NO_MOTION } from './mount-motion';
 import { findDecPlay } from './dec-play';
 import { expectedPerUnit } from './response';
 import { describePeriodicError } from './periodic-error';
@@ -14,20 +15,6 @@ import { describePeriodicError } from './periodic-error';
 const FEWEST_FRAMES = 30;
 /** Beyond this declination 1/cos would make any error of it large. */
 const LARGEST_DECLINATION_DEGREES = 89;
-
-const NOTHING: AxisMotion = {
-  sign: null,
-  signFrom: null,
-  responseUsed: null,
-  commandArcsec: null,
-  displacementArcsec: null,
-  uncorrectedArcsec: null,
-  smoothArcsec: null,
-  periodicErrorArcsec: null,
-  lines: [],
-  noiseArcsec: null,
-  stepArcsec: null,
-};
 
 /**
  * Everything that the corrections of one run tell of the mount: response, uncorrected motion, periodic error, loop,
@@ -48,17 +35,18 @@ export function measureMountMotion(run: RunSeries, rig: RigDescription): MountMo
       `Only ${fewest} frames of this run can be used; ${FEWEST_FRAMES} are needed.`,
     );
   }
-  if (raCorrection === null || decCorrection === null) {
-    return withoutCorrections(run, 'The log has no corrections in both axes.');
+  if (raCorrection === null && decCorrection === null) {
+    return withoutCorrections(run, 'The log has no corrections.');
   }
   const signs = correctionSigns(run, {
-    ra: correctionSignFromLog(frames.ra, run.raErrorArcsec, raCorrection),
-    dec: correctionSignFromLog(frames.dec, run.decErrorArcsec, decCorrection),
+    ra: raCorrection && correctionSignFromLog(frames.ra, run.raErrorArcsec, raCorrection),
+    dec: decCorrection && correctionSignFromLog(frames.dec, run.decErrorArcsec, decCorrection),
   });
   const cosDeclination = cosineOf(run.declinationDegrees);
   const guideRateSidereal = rig.mount?.guideRateSidereal;
   const ra = measureAxis({
     run,
+    correctionUnit: run.correctionUnit,
     guideRateSidereal,
     axis: 'ra',
     frames: frames.ra,
@@ -78,6 +66,7 @@ export function measureMountMotion(run: RunSeries, rig: RigDescription): MountMo
   });
   const dec = measureAxis({
     run,
+    correctionUnit: run.correctionUnit,
     guideRateSidereal,
     axis: 'dec',
     frames: frames.dec,
@@ -121,7 +110,7 @@ function gathered(
   decPlay: MountMotion['decPlay'],
 ): MountMotion {
   const { worm, wormMotion } = ra;
-  const whyMissing = { ...keyed('ra', ra.why), ...keyed('dec', dec.why) };
+  const whyMissing = { ...dec.why, ...ra.why };
   let periodicError: MountMotion['periodicError'] = null;
   if (worm !== null && 'harmonics' in worm && wormMotion !== null) {
     const kept = wormMotion.map((value, n) => (run.setAside[n] === 0 ? value : NaN));
@@ -132,9 +121,6 @@ function gathered(
   }
   const { uncorrected: raMotion } = ra;
   const { uncorrected: decMotion } = dec;
-  if (raMotion === null || decMotion === null) {
-    whyMissing['uncorrected'] = ra.why['uncorrected'] ?? dec.why['uncorrected'] ?? '';
-  }
   return {
     response: { ra: ra.response, dec: dec.response },
     uncorrected: raMotion && decMotion && { ra: raMotion, dec: decMotion },
@@ -146,17 +132,6 @@ function gathered(
     dec: dec.motion,
     decPlay,
   };
-}
-
-/** `response` of RA becomes `response.ra`, `loop.gain` becomes `loop.ra.gain`; a missing floor `seeingFloor.raArcsec`. */
-function keyed(axis: 'ra' | 'dec', why: Readonly<Record<string, string>>): Record<string, string> {
-  return Object.fromEntries(
-    Object.entries(why).map(([key, sentence]) => {
-      const [head = '', ...rest] = key.split('.');
-      const place = head === 'seeingFloor' ? `${axis}Arcsec` : axis;
-      return [[head, place, ...rest].join('.'), sentence];
-    }),
-  );
 }
 
 function withoutCorrections(run: RunSeries, why: string): MountMotion {
@@ -179,8 +154,8 @@ function withoutCorrections(run: RunSeries, why: string): MountMotion {
       'loop.dec.gain': why,
       seeingFloor: `RA: ${bound(run.raErrorArcsec)} Dec: ${bound(run.decErrorArcsec)}`,
     },
-    ra: NOTHING,
-    dec: NOTHING,
+    ra: NO_MOTION,
+    dec: NO_MOTION,
     decPlay: { why },
   };
 }

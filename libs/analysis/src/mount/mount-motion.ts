@@ -49,6 +49,21 @@ export interface AxisMotion {
   readonly stepArcsec: number | null;
 }
 
+/** An axis of which the log tells nothing. */
+export const NO_MOTION: AxisMotion = {
+  sign: null,
+  signFrom: null,
+  responseUsed: null,
+  commandArcsec: null,
+  displacementArcsec: null,
+  uncorrectedArcsec: null,
+  smoothArcsec: null,
+  periodicErrorArcsec: null,
+  lines: [],
+  noiseArcsec: null,
+  stepArcsec: null,
+};
+
 /** Everything that the corrections tell of the mount in one run: the parts of the document, and what they rest on. */
 export interface MountMotion {
   readonly response: { ra: Response; dec: Response } | null;

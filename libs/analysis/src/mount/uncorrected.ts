@@ -1,6 +1,7 @@
 import { type Uncorrected } from '../analysis-document';
 import { type UsedResponse } from './mount-motion';
 import { summedBefore } from './motion-frames';
+import { type EstimatedResponse } from './response';
 
 /** Displacement of the star that each correction causes by a response, towards +error positive. O(n). */
 export function displacements(moves: Float64Array, response: UsedResponse): Float64Array {
@@ -67,4 +68,27 @@ function rangeOf(values: Float64Array): number {
     [Infinity, -Infinity],
   );
   return highest - lowest;
+}
+
+/**
+ * Standard error of a drift whose response comes from the log: the response's own error moves it with all that was
+ * corrected, that of the difference between the directions with the sum of all sizes.
+ */
+export function driftError(
+  fitted: number,
+  displacementArcsec: Float64Array,
+  timeSeconds: Float64Array,
+  estimated: EstimatedResponse | null,
+): number {
+  if (estimated === null) return fitted;
+  const span = (timeSeconds.at(-1) ?? 0) - (timeSeconds[0] ?? 0);
+  const [net, all] = displacementArcsec.reduce<[number, number]>(
+    ([sum, size], move) => [sum + move, size + Math.abs(move)],
+    [0, 0],
+  );
+  return Math.hypot(
+    fitted,
+    (net / span) * (estimated.standardError / estimated.perUnit),
+    (all / span) * (estimated.halfDifferenceError / estimated.perUnit),
+  );
 }
