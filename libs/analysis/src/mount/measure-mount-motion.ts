@@ -10,7 +10,7 @@ import { motionFrames } from './motion-frames';
 import { type MountMotion, NO_MOTION } from './mount-motion';
 import { findDecPlay } from './dec-play';
 import { expectedPerUnit } from './response';
-import { describePeriodicError } from './periodic-error';
+import { describePeriodicError } from './worm-curve';
 
 const FEWEST_FRAMES = 30;
 /** Beyond this declination 1/cos would make any error of it large. */

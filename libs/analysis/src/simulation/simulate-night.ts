@@ -1,10 +1,10 @@
-import { FRAME_STATES, type FrameState, type LogFrames, PIER_SIDES } from '../series/log-frames';
+import { type LogFrames, PIER_SIDES } from '../series/log-frames';
 import { at } from '../statistics/at';
 import { type AxisDisturbance, disturbances } from './disturbances';
+import { Dithering, stateCode } from './dithering';
 import { GuidedAxis } from './guided-axis';
 import { nightClock } from './night-clock';
 import { type NightScenario, type RunScenario } from './night-scenario';
-import { RandomSource } from './random-source';
 
 /** The truth about one axis, a value a frame in arcsec on the sky. */
 export interface AxisTruth extends AxisDisturbance {
@@ -21,9 +21,6 @@ export interface SimulatedNight {
   readonly frames: LogFrames;
   readonly truth: { readonly ra: AxisTruth; readonly dec: AxisTruth };
 }
-
-const code = (state: FrameState) => FRAME_STATES.indexOf(state);
-const SETTLED_FRAMES = 3;
 
 /**
  * A whole guided night from physics, with its truth. In every frame n the star is measured,
@@ -62,7 +59,7 @@ export function simulateNight(scenario: NightScenario, seed: number): SimulatedN
       axes.ra.measure(n, move.ra);
       axes.dec.measure(n, move.dec);
       if (isCloudy(scenario, at(clock.timeSeconds, n))) {
-        state[n] = code('star lost');
+        state[n] = stateCode('star lost');
         axes.ra.lose(n);
         axes.dec.lose(n);
       } else {
@@ -182,49 +179,5 @@ class SimulatedAxis {
       pointingArcsec: this.pointing,
       response: this.response,
     };
-  }
-}
-
-/** Moves the lock position now and then, and tells dither and settling apart. */
-class Dithering {
-  private readonly random: RandomSource;
-  private lastSeconds = 0;
-  private state: FrameState = 'guiding';
-  private quietFrames = 0;
-
-  constructor(
-    private readonly scenario: NightScenario,
-    seed: number,
-  ) {
-    this.random = RandomSource.forCause(seed, 'dithers');
-  }
-
-  moveBefore(runSeconds: number): { ra: number; dec: number } {
-    const { everySeconds, sizeArcsec } = this.scenario.dithers;
-    if (runSeconds === 0) {
-      this.lastSeconds = 0;
-      this.state = 'guiding';
-    }
-    if (everySeconds === 0 || runSeconds - this.lastSeconds < everySeconds)
-      return { ra: 0, dec: 0 };
-    this.lastSeconds = runSeconds;
-    this.state = 'dither';
-    const angle = 2 * Math.PI * this.random.uniform();
-    return { ra: sizeArcsec * Math.cos(angle), dec: sizeArcsec * Math.sin(angle) };
-  }
-
-  stateOf(raError: number, decError: number): number {
-    if (this.state === 'dither') {
-      this.state = 'settling';
-      this.quietFrames = 0;
-      return code('dither');
-    }
-    if (this.state === 'settling') {
-      const quiet = Math.hypot(raError, decError) < this.scenario.dithers.settledArcsec;
-      this.quietFrames = quiet ? this.quietFrames + 1 : 0;
-      if (this.quietFrames < SETTLED_FRAMES) return code('settling');
-      this.state = 'guiding';
-    }
-    return code('guiding');
   }
 }
