@@ -1,6 +1,7 @@
 import {
   ARCSEC_PER_RADIAN,
   dawesArcsec,
+  namedPeriods,
   plateScaleArcsecPerPx,
   rayleighArcsec,
   scaleRatio,
@@ -84,5 +85,17 @@ describe('sidereal rate and worm period', () => {
   it.each(['144', '180', '360', '435'])('a wheel of %s teeth gives its worm period', (teeth) => {
     const { expected, tolerance, title } = check(`3.5.${teeth}`) as Entry<unknown, { T_s: number }>;
     agrees(wormPeriodSeconds(Number(teeth)), { expected: expected.T_s, tolerance, title });
+  });
+
+  it('the worm and its parts are the periods that a spectrum names (12.1)', () => {
+    const { expected, tolerance } = check('12.1') as Entry<
+      { teeth: number },
+      { T: number; T2: number; T3: number }
+    >;
+    const named = namedPeriods({ mount: { wormTeeth: 180 } });
+    const of = (label: string) => named.find((period) => period.label === label)!.periodSeconds;
+    agrees(of('worm'), { expected: expected.T, tolerance, title: '12.1' });
+    agrees(of('worm / 2'), { expected: expected.T2, tolerance, title: '12.1' });
+    agrees(of('worm / 3'), { expected: expected.T3, tolerance, title: '12.1' });
   });
 });

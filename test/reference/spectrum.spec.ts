@@ -188,6 +188,29 @@ describe('uneven synthetic series', () => {
     });
   });
 
+  it('with trend and worm taken off, the fast line stands out as given (8.8d)', () => {
+    const { expected, tolerance } = check('8.8d') as Entry<
+      unknown,
+      { freq_hz: number; power: number; 'log10_fap_baluev_fmax0.2': number }
+    >;
+    const worm = check('8.8a') as Entry<{ freq_hz: number[] }, unknown>;
+    const fit = fitLines(t!, y!, worm.inputs.freq_hz.slice(0, 2), 1);
+    const middle = t!.reduce((sum, time) => sum + time, 0) / t!.length;
+    const left = y!.map((value, i) => {
+      const time = t![i]!;
+      const waves = fit.lines.reduce(
+        (sum, { frequency, amplitude, phaseRadians }) =>
+          sum + amplitude * Math.cos(2 * Math.PI * frequency * time + phaseRadians),
+        0,
+      );
+      return value - waves - fit.polynomial[0]! - fit.polynomial[1]! * (time - middle);
+    });
+    const [power] = lombScargle(t!, left, [expected.freq_hz]);
+    within(power!, expected.power, tolerance);
+    const alarm = falseAlarmProbability(power!, t!.length, 0.2 * effectiveDuration(t!));
+    within(Math.log10(alarm), expected['log10_fap_baluev_fmax0.2'], { rel: 1e-6 });
+  });
+
   it('its three lines are found and two of them named by the worm', () => {
     const worm = SIDEREAL_DAY_SECONDS / 180;
     const named = [
