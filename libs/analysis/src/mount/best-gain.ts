@@ -1,3 +1,5 @@
+import { goldenSection } from './golden-section';
+
 /** What a loop has to follow and what it must not follow, by frames; all in arcsec. */
 export interface LoopDisturbance {
   /** White noise of one measurement. */
@@ -10,7 +12,8 @@ export interface LoopDisturbance {
 
 const LOWEST_GAIN = 0.02;
 const HIGHEST_GAIN = 1.5;
-const GAIN_STEP = 0.01;
+/** A minimum is flat: closer than the square root of a double's last digit it cannot be told. */
+const GAIN_WIDTH = 1e-8;
 
 /**
  * Variance of the true pointing of an integrator of gain k, e[n+1] = e[n] − k·m[n] + disturbance:
@@ -38,17 +41,10 @@ export function sensitivity(gain: number, periodFrames: number): number {
 }
 
 /**
- * The gain that points best for this noise and this mount, by steps of 0.01 between 0.02 and 1.5. With random steps alone
+ * The gain between 0.02 and 1.5 that points best for this noise and this mount. With random steps alone
  * it is (−s + √(s² + 4s))/2, s = q/r (checks.json 11.5).
  */
 export function bestGain(disturbance: LoopDisturbance): number {
-  let best = LOWEST_GAIN;
-  let least = Infinity;
-  const trials = Math.round((HIGHEST_GAIN - LOWEST_GAIN) / GAIN_STEP);
-  for (let trial = 0; trial <= trials; trial++) {
-    const gain = LOWEST_GAIN + trial * GAIN_STEP;
-    const variance = pointingVariance(gain, disturbance);
-    if (variance < least) [best, least] = [gain, variance];
-  }
-  return best;
+  const variance = (gain: number) => pointingVariance(gain, disturbance);
+  return goldenSection(variance, LOWEST_GAIN, HIGHEST_GAIN, GAIN_WIDTH);
 }

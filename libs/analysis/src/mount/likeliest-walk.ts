@@ -1,3 +1,4 @@
+import { goldenSection } from './golden-section';
 import { type LevelFrames, whitenedLeastSquares } from './whitened-least-squares';
 
 /** Natural logarithms of the walk's variance a frame over the noise's: from a level that stands still to one that is all there is. */
@@ -7,7 +8,6 @@ const COARSE_TRIALS = 9;
 const COARSE_STEP = (HIGHEST - LOWEST) / COARSE_TRIALS;
 /** A third in the logarithm of a variance ratio changes no weight that matters. */
 const FINE_STEP = 0.35;
-const GOLDEN = (Math.sqrt(5) - 1) / 2;
 /** So many frames tell the ratio well enough: on longer nights the middle of the run speaks for it. */
 const ENOUGH_FRAMES = 2048;
 
@@ -46,25 +46,5 @@ export function likeliestWalk(
     const trialCost = cost(LOWEST + trial * COARSE_STEP);
     if (trialCost < bestCost) [best, bestCost] = [LOWEST + trial * COARSE_STEP, trialCost];
   }
-  return walk(goldenSection(cost, best - COARSE_STEP, best + COARSE_STEP));
-}
-
-function goldenSection(cost: (x: number) => number, from: number, to: number): number {
-  let [low, high] = [from, to];
-  let left = high - GOLDEN * (high - low);
-  let right = low + GOLDEN * (high - low);
-  let leftCost = cost(left);
-  let rightCost = cost(right);
-  while (high - low > FINE_STEP) {
-    if (leftCost < rightCost) {
-      [high, right, rightCost] = [right, left, leftCost];
-      left = high - GOLDEN * (high - low);
-      leftCost = cost(left);
-    } else {
-      [low, left, leftCost] = [left, right, rightCost];
-      right = low + GOLDEN * (high - low);
-      rightCost = cost(right);
-    }
-  }
-  return (low + high) / 2;
+  return walk(goldenSection(cost, best - COARSE_STEP, best + COARSE_STEP, FINE_STEP));
 }
