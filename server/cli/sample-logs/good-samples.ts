@@ -4,11 +4,9 @@ import {
   type NightScenario,
   PLAIN_DIALECT,
   plateScaleArcsecPerPx,
-  type RigDescription,
   simulateNight,
   toCsv,
 } from '@stillpier/analysis';
-import type { ColumnMap } from '@stillpier/guide-log';
 import {
   countClaims,
   decDriftClaim,
@@ -19,32 +17,12 @@ import {
   textClaim,
   wormClaims,
 } from './night-claims';
-import { rewriteTable, withLines } from './rewrite-table';
+import { ORCHARD_PIER } from './orchard-pier';
+import { ownHeaders } from './own-headers-sample';
+import { withLines } from './rewrite-table';
 import type { GoodSample } from './sample';
-import {
-  CALM,
-  LATE,
-  POLAR_DRIFT,
-  STRAIN_WAVE,
-  THREE_TARGETS,
-  UNGUIDED,
-  WORM,
-} from './sample-scenarios';
+import { CALM, POLAR_DRIFT, STRAIN_WAVE, THREE_TARGETS, UNGUIDED, WORM } from './sample-scenarios';
 
-const ORCHARD_PIER: RigDescription = {
-  name: 'Orchard pier',
-  mount: { kind: 'worm', wormTeeth: 180, guideRateSidereal: 0.5 },
-  imaging: { focalLengthMm: 530, apertureMm: 106, pixelUm: 3.76, binning: 1, sensor: 'mono' },
-  filters: [
-    { name: 'H-alpha 7 nm', subSeconds: 600 },
-    { name: 'Luminance', subSeconds: 180 },
-  ],
-  guiding: { focalLengthMm: 200, apertureMm: 50, pixelUm: 3.75, binning: 1 },
-  seeingFwhmArcsec: 2.2,
-  subSeconds: 300,
-  keepAspect: 1.15,
-  site: { latitudeDegrees: 45, longitudeDegrees: -75, timeZone: 'America/Toronto' },
-};
 const GUIDE_SCALE = plateScaleArcsecPerPx(3.75, 1, 200);
 
 const NO_SKY: CsvDialect = { ...PLAIN_DIALECT, targets: false, sky: false };
@@ -134,64 +112,6 @@ function guidePixels(): GoodSample {
       numberClaim('optics.guideScaleArcsecPerPx', 'guide scale', '″/px', 3.8675, 0.0001),
       ...countClaims(night, 0),
       ...rmsClaims(night, 0, 0.002),
-    ],
-  };
-}
-
-function ownHeaders(): GoodSample {
-  const dialect: CsvDialect = { ...NO_SKY, delimiter: '\t', time: 'timestamp' };
-  const { night, csv } = sample(LATE, 104, dialect);
-  const header = [
-    'Clock',
-    'Off east',
-    'Off north',
-    'Pulse 1',
-    'Way 1',
-    'Pulse 2',
-    'Way 2',
-    'Phase',
-  ];
-  const letters = new Map([
-    ['guiding', 'G'],
-    ['dither', 'D'],
-    ['settling', 'S'],
-    ['star lost', 'L'],
-  ]);
-  const map: ColumnMap = {
-    delimiter: '\t',
-    columns: {
-      Clock: { role: 'time', unit: 'clock' },
-      'Off east': { role: 'raError', unit: 'arcsec' },
-      'Off north': { role: 'decError', unit: 'arcsec' },
-      'Pulse 1': { role: 'raCorrection', unit: 'ms' },
-      'Way 1': { role: 'raDirection' },
-      'Pulse 2': { role: 'decCorrection', unit: 'ms' },
-      'Way 2': { role: 'decDirection' },
-      Phase: { role: 'state' },
-    },
-    states: { G: 'guiding', D: 'dither', S: 'settling', L: 'star lost' },
-    correctionSign: 'same',
-    targetDeclinationDegrees: 20,
-    targetHourAngleHours: -1.5,
-    startTime: '2026-03-14T22:55:00-04:00',
-  };
-  return {
-    file: 'own-headers.tsv',
-    shows:
-      'Two hours around midnight under headers that are not recognised, with clock times, letters for directions and states: only the column map beside it tells what they are. Tabs.',
-    night,
-    content: rewriteTable(csv, '\t', header, ([time = '', ra = '', dec = '', ...rest]) => {
-      const [raPulse = '', decPulse = '', state = ''] = rest;
-      const pulses = [...unsigned(raPulse, 'E', 'W'), ...unsigned(decPulse, 'N', 'S')];
-      return [localClock(time), ra, dec, ...pulses, letters.get(state) ?? ''];
-    }),
-    rig: ORCHARD_PIER,
-    map,
-    claims: [
-      textClaim('runs[0].start', 'start', '2026-03-15T02:55:00Z'),
-      ...countClaims(night, 0),
-      ...setAsideClaims(night, 0),
-      ...rmsClaims(night, 0),
     ],
   };
 }
@@ -306,16 +226,4 @@ function roughEdges(): GoodSample {
       ...rmsClaims(night, 0),
     ],
   };
-}
-
-/** Time of day at four hours west of Greenwich, as a clock on the wall shows it. */
-function localClock(instant: string): string {
-  return new Date(Date.parse(instant) - 4 * 3_600_000).toISOString().slice(11, 21);
-}
-
-/** A signed pulse as its size and the letter of its direction. */
-function unsigned(pulse: string, positive: string, negative: string): [string, string] {
-  const value = Number(pulse);
-  if (value === 0) return ['0', ''];
-  return [String(Math.abs(value)), value > 0 ? positive : negative];
 }
