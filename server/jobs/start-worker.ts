@@ -5,8 +5,6 @@ import { makePool } from '../database/connection';
 import { failAbandonedImports } from './abandoned-imports';
 import { WorkerPresence } from './worker-presence';
 
-/** A job hears that the worker stops after this time. */
-const GRACE_MS = 2000;
 /** Of the queue's own messages; the others tell of every job. */
 const LOGGED_LEVELS = new Set<string>(['error', 'warning']);
 
@@ -16,6 +14,8 @@ export interface WorkerOptions {
   readonly tasks: TaskList;
   /** How often a worker looks for the jobs of the dead. */
   readonly sweepMs: number;
+  /** How long a job may go on once the worker is told to stop. */
+  readonly graceMs: number;
   readonly log: (message: string, error?: unknown) => void;
 }
 
@@ -31,10 +31,13 @@ export async function startWorker(options: WorkerOptions): Promise<Worker> {
   const events = new EventEmitter() as WorkerEvents;
   let poolId = '';
   let isStopping = false;
-  const interrupted: { id: string; attempts: number }[] = [];
+  /** Jobs that were begun and not ended, by id: how often they had been tried before. */
+  const begun = new Map<string, number>();
   events.on('pool:create', ({ workerPool }) => (poolId = workerPool.id));
+  events.on('job:start', ({ job }) => begun.set(job.id, job.attempts - 1));
+  events.on('job:success', ({ job }) => begun.delete(job.id));
   events.on('job:error', ({ job }) => {
-    if (isStopping) interrupted.push({ id: job.id, attempts: job.attempts - 1 });
+    if (!isStopping) begun.delete(job.id);
   });
 
   const runner = await run({
@@ -44,7 +47,7 @@ export async function startWorker(options: WorkerOptions): Promise<Worker> {
     pollInterval: 1000,
     noHandleSignals: true,
     events,
-    preset: { worker: { gracefulShutdownAbortTimeout: GRACE_MS } },
+    preset: { worker: { gracefulShutdownAbortTimeout: options.graceMs } },
     logger: new Logger(() => (level, message) => {
       if (LOGGED_LEVELS.has(level)) log(message);
     }),
@@ -62,8 +65,10 @@ export async function startWorker(options: WorkerOptions): Promise<Worker> {
     stop: async () => {
       isStopping = true;
       await runner.stop();
-      // The queue counts an interrupted run as a failed try and delays the next one: undo both.
-      for (const { id, attempts } of interrupted) {
+      // The queue counts an interrupted run as a failed try and delays the next one: undo both. Unlocked first, since
+      // it may still be about to fail a job that did not hear in time.
+      await pool.query('SELECT graphile_worker.force_unlock_workers(ARRAY[$1])', [poolId]);
+      for (const [id, attempts] of begun) {
         await pool.query(
           'SELECT graphile_worker.reschedule_jobs(ARRAY[$1::bigint], run_at => now(), attempts => $2::int)',
           [id, attempts],

@@ -1,3 +1,4 @@
+import { inspect } from 'node:util';
 import { setTimeout as sleep } from 'node:timers/promises';
 import { importPaths, type LogImport, logImportSchema } from '@stillpier/contract';
 import { makeKnex } from '../../server/database/connection';
@@ -14,7 +15,7 @@ export interface TestWorker {
 export async function startTestWorker(app: TestApp): Promise<TestWorker> {
   const logged: string[] = [];
   const log = (message: string, error?: unknown): void => {
-    logged.push(error === undefined ? message : `${message}: ${String(error)}`);
+    logged.push(error === undefined ? message : `${message}: ${inspect(error)}`);
   };
   const knex = makeKnex(app.databaseUrl, 4);
   const transport = { sendMail: () => Promise.reject(new Error('this worker sends no mail')) };
@@ -24,6 +25,7 @@ export async function startTestWorker(app: TestApp): Promise<TestWorker> {
     knex,
     tasks: taskList({ mail, log }),
     sweepMs: 200,
+    graceMs: 50,
     log,
   });
   return {
