@@ -13,9 +13,6 @@ import { expectedPerUnit } from './response';
 import { describePeriodicError } from './worm-curve';
 
 const FEWEST_FRAMES = 30;
-/** Beyond this declination 1/cos would make any error of it large. */
-const LARGEST_DECLINATION_DEGREES = 89;
-
 /**
  * Everything that the corrections of one run tell of the mount: response, uncorrected motion, periodic error, loop,
  * seeing floor (SCIENCE 2 to 4). What cannot be told is null, with a sentence under its key in `whyMissing`.
@@ -136,26 +133,32 @@ function gathered(
 
 function withoutCorrections(run: RunSeries, why: string): MountMotion {
   const { setAside, timeSeconds, cadenceSeconds } = run;
-  const loop = (errorArcsec: Float64Array) =>
+  const loopOf = (errorArcsec: Float64Array) =>
     describeLoop({ errorArcsec, setAside, timeSeconds, cadenceSeconds }, null, null);
+  const loop = { ra: loopOf(run.raErrorArcsec), dec: loopOf(run.decErrorArcsec) };
   const bound = (errorArcsec: Float64Array) =>
     boundSentence(errorArcsec, motionFrames(run, errorArcsec));
   return {
     response: null,
     uncorrected: null,
     periodicError: null,
-    loop: { ra: loop(run.raErrorArcsec), dec: loop(run.decErrorArcsec) },
+    loop,
     seeingFloor: null,
     whyMissing: {
       response: why,
       uncorrected: why,
       periodicError: why,
-      'loop.ra.gain': why,
-      'loop.dec.gain': why,
+      ...nullReasons('loop.ra', loop.ra, why),
+      ...nullReasons('loop.dec', loop.dec, why),
       seeingFloor: `RA: ${bound(run.raErrorArcsec)} Dec: ${bound(run.decErrorArcsec)}`,
     },
     ra: NO_MOTION,
     dec: NO_MOTION,
     decPlay: { why },
   };
+}
+
+function nullReasons(path: string, part: object, why: string): Record<string, string> {
+  const missing = Object.entries(part).filter(([, value]) => value === null);
+  return Object.fromEntries(missing.map(([key]) => [`${path}.${key}`, why]));
 }
