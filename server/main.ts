@@ -6,16 +6,18 @@ import { configurationOrExit } from './configuration';
 import { makeKnex, makePool } from './database/connection';
 import { NotifyHub } from './database/notify-hub';
 import { STANDARD_ALLOWANCES } from './http/limits';
+import { IMPORT_CHANNEL } from './imports/import-notices';
 import { onStop } from './lifecycle';
 
 const PASSWORD_ROUNDS = 12;
 const CLOSE_TIMEOUT_MS = 5000;
+const REQUEST_TIMEOUT_MS = 3_600_000;
 
 const configuration = configurationOrExit();
 const logger = pino({ level: configuration.LOG_LEVEL });
 const knex = makeKnex(configuration.DATABASE_URL, 10);
 const pool = makePool(configuration.DATABASE_URL, 5);
-const hub = new NotifyHub(configuration.DATABASE_URL, 'imports');
+const hub = new NotifyHub(configuration.DATABASE_URL, IMPORT_CHANNEL);
 await hub.start();
 const app = buildApp({
   configuration,
@@ -27,7 +29,8 @@ const app = buildApp({
   passwordRounds: PASSWORD_ROUNDS,
   webFolder: path.resolve('dist/web/browser'),
 });
-const server = createServer(app.express);
+// Node's own five minutes are too short for a large log on a slow line.
+const server = createServer({ requestTimeout: REQUEST_TIMEOUT_MS }, app.express);
 const port = await new Promise<number>((resolve, reject) => {
   server.once('error', reject);
   server.listen(configuration.PORT, configuration.HOST, () => {
