@@ -12,7 +12,7 @@ const root = resolve(dirname(fileURLToPath(import.meta.url)), '../..');
 
 /** Path of the bundle of these very sources; its name holds their hash, so that two commands at once do not disturb each other. */
 async function bundle() {
-  const hash = treeHash(root, 'libs', 'server/cli', 'package-lock.json', 'tsconfig.json');
+  const hash = treeHash(root, 'libs', 'server', 'package-lock.json', 'tsconfig.json');
   const folder = join(root, 'dist/cli');
   const file = join(folder, `analyse-${hash.slice(0, 16)}.mjs`);
   if (existsSync(file)) return file;

@@ -77,6 +77,19 @@ describe('the command analyse', () => {
     expect(document.runs[0]?.subs?.lengthSeconds).toBe(30);
   });
 
+  it("reads times without a zone by the clock of the rig's site", async () => {
+    const lines = Array.from({ length: 40 }, (_, n) => `2026-03-14T21:40:${10 + n},1,2`);
+    const log = file('local.csv', [HEADER.replace('time s', 'timestamp'), ...lines].join('\n'));
+    const rig = file('site.json', '{"site":{"timeZone":"America/Toronto"}}');
+    // Four hours west of Greenwich since 8 March 2026 (IANA time zone database).
+    expect((await documentOf([log, '--rig', rig])).runs[0]?.start).toBe('2026-03-15T01:40:10Z');
+    const { runs, reading } = await documentOf([log]);
+    expect(runs[0]?.start).toBeNull();
+    expect(reading.warnings).toEqual([
+      'The times carry no time zone, so that the instant of the start is not known.',
+    ]);
+  });
+
   it('says in one sentence what it cannot use', async () => {
     const log = file('log.csv', LOG);
     const missing = join(folder, 'missing.csv');
@@ -137,6 +150,12 @@ describe('the command analyse', () => {
     ],
     ['--rig', '[1]', 'The rig', 'must be an object'],
     ['--rig', '{', 'The rig', 'is not valid JSON'],
+    [
+      '--rig',
+      '{"site":{"timeZone":"Nowhere/Town"}}',
+      'The rig',
+      'has a value that cannot be used at site.timeZone (needs a time zone such as Europe/Lisbon)',
+    ],
     [
       '--map',
       '{"columns":{"x":{"role":"snr","sign":1}}}',

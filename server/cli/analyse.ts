@@ -39,6 +39,6 @@ async function analyseFile(args: readonly string[], input: Readable): Promise<An
   const { file, mapFile, rigFile, subSeconds } = readArguments(args);
   const map = await readJsonFile('The column map', mapFile, columnMapSchema);
   const rig = await readJsonFile('The rig', rigFile, rigDescriptionSchema);
-  const { frames, reading } = await readLogFile(file, input, map);
+  const { frames, reading } = await readLogFile(file, input, map, rig.site?.timeZone);
   return analyseLog(frames, reading, rig, { subSeconds });
 }

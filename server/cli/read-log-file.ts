@@ -2,16 +2,28 @@ import { createReadStream } from 'node:fs';
 import { pipeline, type Readable } from 'node:stream';
 import { createGunzip } from 'node:zlib';
 import { type ColumnMap, createLogReader, type GuideLog } from '@stillpier/guide-log';
+import { instantOfWallClock } from '../nights/night-date';
 import { whyUnreadable } from './why-unreadable';
 
-/** Reads a log, plain or compressed by gzip (told by its first two bytes), piece by piece. */
+/**
+ * Reads a log, plain or compressed by gzip (told by its first two bytes), piece by piece.
+ *
+ * @param timeZone Of the clock that wrote times without a zone; undefined: not known.
+ */
 export async function readLogFile(
   file: string,
   input: Readable,
   map: ColumnMap | undefined,
+  timeZone: string | undefined,
 ): Promise<GuideLog> {
   const source = file === '-' ? input : createReadStream(file);
-  const reader = createLogReader({ map });
+  const reader = createLogReader({
+    map,
+    instantOfLocalTime:
+      timeZone === undefined
+        ? undefined
+        : (seconds) => instantOfWallClock(seconds * 1000, timeZone).getTime() / 1000,
+  });
   try {
     for await (const chunk of unpacked(source)) reader.push(chunk);
   } catch (error) {

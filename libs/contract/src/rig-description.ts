@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { MOUNT_KINDS } from './rig';
+import { MOUNT_KINDS, siteSchema } from './rig';
 import { SENSORS } from './setup';
 
 const lengthMm = (most: number) => z.number().positive().max(most);
@@ -52,7 +52,7 @@ export const rigDescriptionSchema = z
       .strictObject({
         latitudeDegrees: z.number().min(-90).max(90).optional().describe('North positive'),
         longitudeDegrees: z.number().min(-180).max(180).optional().describe('East positive'),
-        timeZone: z.string().max(60).optional().describe('IANA name'),
+        timeZone: siteSchema.shape.timeZone.optional(),
       })
       .optional(),
   })
