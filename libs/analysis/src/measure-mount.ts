@@ -38,7 +38,7 @@ const NOT_COMPUTED = 'This is not computed by this version.';
 export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription): MountMeasures[] {
   const motions = runs.map(({ series }) => measureMountMotion(series, rig));
   const polar = polarAlignments(runs, motions, rig.site?.latitudeDegrees ?? null);
-  return motions.map((motion, i) => {
+  return motions.map((motion) => {
     const alignment = polar.of.get(motion) ?? null;
     const backlash = backlashOf(motion);
     return {
@@ -54,7 +54,6 @@ export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription):
         findings: [],
       },
       whyMissing: {
-        ...loopReasons(runs[i]?.run.whyMissing ?? {}, motion),
         ...motion.whyMissing,
         ...(alignment === null
           ? { polarAlignment: 'The drift of Dec without corrections is not known.' }
@@ -69,20 +68,6 @@ export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription):
       uncorrectedDecArcsec: motion.dec.uncorrectedArcsec,
     };
   });
-}
-
-/** What rests on the loop's gain is missing for the gain's own reason, and its lag-1 for that of the axis. */
-function loopReasons(whyGuiding: WhyMissing, { loop, whyMissing }: MountMotion): WhyMissing {
-  const reasons: WhyMissing = {};
-  for (const axis of ['ra', 'dec'] as const) {
-    const gainReason = whyMissing[`loop.${axis}.gain`] ?? 'The corrections do not tell it.';
-    for (const [key, value] of Object.entries(loop[axis] ?? {})) {
-      if (value !== null) continue;
-      const own = key === 'lag1' ? whyGuiding[`${axis}.lag1`] : undefined;
-      reasons[`loop.${axis}.${key}`] = own ?? gainReason;
-    }
-  }
-  return reasons;
 }
 
 /** The document's part of the Dec gap. */
