@@ -13,6 +13,9 @@ import { expectedPerUnit } from './response';
 import { describePeriodicError } from './worm-curve';
 
 const FEWEST_FRAMES = 30;
+/** Beyond this declination 1/cos would make any error of it large. */
+const LARGEST_DECLINATION_DEGREES = 89;
+
 /**
  * Everything that the corrections of one run tell of the mount: response, uncorrected motion, periodic error, loop,
  * seeing floor (SCIENCE 2 to 4). What cannot be told is null, with a sentence under its key in `whyMissing`.
