@@ -1,3 +1,5 @@
+import { ARCSEC_PER_RADIAN } from '../optics/plate-scale';
+import { STAR_RATE_ARCSEC_PER_SECOND } from '../sky/earth-rotation';
 import { robustSigma } from '../statistics/robust-sigma';
 import { ColourFilter } from './colour-filter';
 import { type LevelWhitening } from './level-whitening';
@@ -32,8 +34,6 @@ const COARSE_POINTS = 36;
 /** Narrowest and widest gap that the coarse scan tries beside none, as parts of the driver's way. */
 const NARROWEST = 1 / 2000;
 const WIDEST = 0.97;
-/** Drift that bends, as a turning polar error does: powers of the time. */
-const TREND_POWERS = [1, 2, 3];
 /** Innovations beyond so many robust sigmas are bumps that no gap explains. */
 const BUMP_SIGMAS = 5;
 const COLOUR_ORDER = 4;
@@ -157,10 +157,19 @@ export class PlayProfile {
   }
 }
 
-/** Powers of the time, scaled to −1 … 1. */
+/**
+ * A steady drift and the two ways in which a polar error bends it as the sky turns: c, 1 − cos wc and wc − sin wc, c the
+ * time from the middle of the run and w the star rate. On a short run they are its first three powers.
+ */
 export function trendColumns(timeSeconds: Float64Array): readonly Float64Array[] {
-  const last = timeSeconds[timeSeconds.length - 1] ?? NaN;
-  return TREND_POWERS.map((power) => timeSeconds.map((time) => (2 * (time / last) - 1) ** power));
+  const middle = ((timeSeconds[0] ?? 0) + (timeSeconds.at(-1) ?? 0)) / 2;
+  const rate = STAR_RATE_ARCSEC_PER_SECOND / ARCSEC_PER_RADIAN;
+  const angle = timeSeconds.map((time) => rate * (time - middle));
+  return [
+    angle,
+    angle.map((each) => 1 - Math.cos(each)),
+    angle.map((each) => each - Math.sin(each)),
+  ];
 }
 
 /** Clears `used` where a residual is a bump. */

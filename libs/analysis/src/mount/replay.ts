@@ -1,8 +1,9 @@
 import { type RunSeries, SET_ASIDE_CODES } from '../series/run-series';
+import { bumpsOf } from './bumps';
 import { guideAgain } from './guide-again';
 import { loopLaw, type LoopLaw } from './loop-law';
 import { summedBefore } from './motion-frames';
-import { type AxisMotion, type MountMotion } from './mount-motion';
+import { type MountMotion } from './mount-motion';
 
 /** What a replay takes as given; shown wherever its figures are. */
 export const REPLAY_ASSUMPTIONS: readonly string[] = [
@@ -33,59 +34,55 @@ export interface ReplayableAxis {
   /** `starArcsec` with drift, lines and dither jumps alone. */
   readonly smoothStarArcsec: Float64Array;
   /** Parts of `starArcsec` that a cure takes away. */
-  readonly parts: Readonly<Record<Exclude<Cure, 'backlash'>, Float64Array | null>>;
+  readonly parts: Readonly<Record<Exclude<Cure, 'backlash'>, Float64Array>>;
 }
 
-/** Both axes of a run, or null where the corrections do not tell the star's own motion. */
-export function replayableAxes(
-  run: RunSeries,
-  motion: MountMotion,
-  bumps: { readonly ra: Float64Array | null; readonly dec: Float64Array | null },
-): { readonly ra: ReplayableAxis; readonly dec: ReplayableAxis } | null {
-  const { uncorrected, loop, decPlay } = motion;
-  const gap = 'determined' in decPlay && decPlay.determined ? decPlay.arcsec : 0;
-  const ra = replayableAxis(
-    run,
-    { error: run.raErrorArcsec, motion: motion.ra, gain: loop.ra?.gain ?? 0, gap: 0 },
-    (uncorrected?.ra.driftArcsecPerMinute ?? 0) / 60,
-    bumps.ra,
-  );
-  const dec = replayableAxis(
-    run,
-    { error: run.decErrorArcsec, motion: motion.dec, gain: loop.dec?.gain ?? 0, gap },
-    (uncorrected?.dec.driftArcsecPerMinute ?? 0) / 60,
-    bumps.dec,
-  );
+export interface ReplayableAxes {
+  readonly ra: ReplayableAxis;
+  readonly dec: ReplayableAxis;
+}
+
+/** Both axes of a run, or null where one of them cannot be replayed. O(n). */
+export function replayableAxes(run: RunSeries, motion: MountMotion): ReplayableAxes | null {
+  const ra = replayableAxis(run, motion, 'ra');
+  const dec = replayableAxis(run, motion, 'dec');
   return ra && dec && { ra, dec };
 }
 
-function replayableAxis(
+/**
+ * One axis of a run, or null where the log does not tell what its corrections moved, or the gain that they were given with.
+ * O(n).
+ */
+export function replayableAxis(
   run: RunSeries,
-  axis: {
-    readonly error: Float64Array;
-    readonly motion: AxisMotion;
-    readonly gain: number;
-    readonly gap: number;
-  },
-  driftPerSecond: number,
-  bumps: Float64Array | null,
+  motion: MountMotion,
+  axis: 'ra' | 'dec',
 ): ReplayableAxis | null {
-  const { commandArcsec, displacementArcsec, uncorrectedArcsec, smoothArcsec } = axis.motion;
+  const { commandArcsec, displacementArcsec, uncorrectedArcsec, smoothArcsec } = motion[axis];
+  const uncorrected = motion.uncorrected?.[axis];
   if (commandArcsec === null || displacementArcsec === null) return null;
-  if (uncorrectedArcsec === null || smoothArcsec === null) return null;
+  if (uncorrectedArcsec === null || smoothArcsec === null || uncorrected === undefined) return null;
+  const guided = commandArcsec.some((command) => command !== 0);
+  const gain = guided ? motion.loop[axis]?.gain : 0;
+  if (gain === null || gain === undefined) return null;
+
+  const error = axis === 'ra' ? run.raErrorArcsec : run.decErrorArcsec;
   const moved = summedBefore(displacementArcsec);
+  const starArcsec = error.map((value, n) => value - (moved[n] ?? 0));
+  const rest = uncorrectedArcsec.map((value, n) => value - (smoothArcsec[n] ?? NaN));
+  const driftPerSecond = uncorrected.driftArcsecPerMinute / 60;
   const drift = run.timeSeconds.map((time) => driftPerSecond * time);
-  const starArcsec = axis.error.map((error, n) => error - (moved[n] ?? 0));
-  const restAt = (n: number) => (uncorrectedArcsec[n] ?? NaN) - (smoothArcsec[n] ?? NaN);
+  const { decPlay } = motion;
+  const gapKnown = axis === 'dec' && 'determined' in decPlay && decPlay.determined;
   return {
-    law: loopLaw(axis.error, commandArcsec, axis.gain),
+    law: loopLaw(error, commandArcsec, gain),
     starArcsec,
-    smoothStarArcsec: starArcsec.map((star, n) => star - restAt(n)),
-    gapArcsec: axis.gap,
+    smoothStarArcsec: starArcsec.map((star, n) => star - (rest[n] ?? NaN)),
+    gapArcsec: gapKnown ? decPlay.arcsec : 0,
     parts: {
       drift,
       'periodic error': smoothArcsec.map((smooth, n) => smooth - (drift[n] ?? 0)),
-      'gusts and bumps': bumps,
+      'gusts and bumps': bumpsOf(rest, run.cadenceSeconds),
     },
   };
 }
@@ -98,8 +95,8 @@ export function replayAxis(axis: ReplayableAxis, change: ReplayChange): Float64A
     if (cure === 'backlash') continue;
     const parts = axis.parts[cure];
     // The guider takes the star where it stands: what is cured must not start with a jump.
-    const start = parts?.[0] ?? 0;
-    parts?.forEach((part, n) => {
+    const start = parts[0] ?? 0;
+    parts.forEach((part, n) => {
       star[n] = (star[n] ?? NaN) - (part - start);
     });
   }
@@ -125,7 +122,7 @@ const SETTLING = SET_ASIDE_CODES.indexOf('settling');
  */
 export function replayedRun(
   run: RunSeries,
-  axes: { readonly ra: ReplayableAxis; readonly dec: ReplayableAxis },
+  axes: ReplayableAxes,
   change: { readonly ra: ReplayChange; readonly dec: ReplayChange },
 ): RunSeries {
   const raErrorArcsec = replayAxis(axes.ra, change.ra);
