@@ -1,4 +1,4 @@
-import { provideHttpClient, withFetch, withInterceptors } from '@angular/common/http';
+import { provideHttpClient, withInterceptors } from '@angular/common/http';
 import { type ApplicationConfig, inject, provideBrowserGlobalErrorListeners } from '@angular/core';
 import { MAT_RIPPLE_GLOBAL_OPTIONS, MATERIAL_ANIMATIONS } from '@angular/material/core';
 import { MAT_SNACK_BAR_DEFAULT_OPTIONS } from '@angular/material/snack-bar';
@@ -29,7 +29,8 @@ export const appConfig: ApplicationConfig = {
         });
       }),
     ),
-    provideHttpClient(withFetch(), withInterceptors([problemInterceptor])),
+    // XMLHttpRequest, not fetch: only it tells how far an upload has come.
+    provideHttpClient(withInterceptors([problemInterceptor])),
     { provide: TitleStrategy, useClass: PageTitle },
     { provide: MATERIAL_ANIMATIONS, useValue: { animationsDisabled: true } },
     { provide: MAT_RIPPLE_GLOBAL_OPTIONS, useValue: { disabled: true } },

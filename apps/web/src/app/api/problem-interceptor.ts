@@ -14,7 +14,7 @@ export const problemInterceptor: HttpInterceptorFn = (request, next) => {
       const problem = problemErrorOf(error);
       if (problem instanceof ProblemError && problem.status === 401 && session.account()) {
         session.forget();
-        void router.navigate(['/sign-in'], { queryParams: { then: router.url } });
+        void router.navigate(['/sign-in'], { queryParams: { returnTo: router.url } });
       }
       return throwError(() => problem);
     }),

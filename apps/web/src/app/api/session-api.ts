@@ -19,8 +19,7 @@ export class SessionApi {
   }
 
   async signIn(body: SignIn): Promise<void> {
-    await firstValueFrom(this.http.post(accountPaths.session, body));
-    this.take(await firstValueFrom(this.http.get(accountPaths.session)));
+    this.take(await firstValueFrom(this.http.post(accountPaths.session, body)));
   }
 
   async signOut(): Promise<void> {

@@ -7,5 +7,5 @@ export const signedIn: CanActivateFn = async (_route, state) => {
   const session = inject(SessionApi);
   const router = inject(Router);
   if (await session.ready()) return true;
-  return router.createUrlTree(['/sign-in'], { queryParams: { then: state.url } });
+  return router.createUrlTree(['/sign-in'], { queryParams: { returnTo: state.url } });
 };

@@ -21,7 +21,7 @@ export class SignInPage {
   private readonly router = inject(Router);
 
   /** Query parameter: the page that asked for an account. */
-  readonly then = input<string>();
+  readonly returnTo = input<string>();
 
   protected readonly submission = new FormSubmission();
   protected readonly form = inject(NonNullableFormBuilder).group({
@@ -34,7 +34,7 @@ export class SignInPage {
     const accepted = await this.submission.send(this.form, signInSchema, (body) =>
       this.session.signIn(body),
     );
-    if (accepted) await this.router.navigateByUrl(ownPath(this.then()));
+    if (accepted) await this.router.navigateByUrl(ownPath(this.returnTo()));
   }
 }
 
