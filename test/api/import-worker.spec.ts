@@ -38,10 +38,10 @@ async function send(variant: number, frames: number): Promise<LogImport> {
 }
 const now = async (id: string): Promise<LogImport> =>
   logImportSchema.parse((await cast.owner.get(importPaths.one(cast.rigId, id))).body);
-const untilReading = (id: string) =>
+const untilRunning = (id: string) =>
   expect
-    .poll(async () => (await now(id)).stage, { timeout: 20_000, interval: 10 })
-    .toBe('Reading the lines');
+    .poll(async () => (await now(id)).state, { timeout: 20_000, interval: 10 })
+    .toBe('running');
 const jobsOf = (id: string) =>
   app.knex('graphile_worker._private_jobs').whereRaw(`payload->>'importId' = ?`, [id]);
 
@@ -49,7 +49,7 @@ describe('a worker that is killed in the middle of an import', () => {
   it('is followed by the next one, which finishes it with nothing counted twice', async () => {
     const killed = await startWorkerProcess(app);
     const { id } = await send(1, MANY_FRAMES);
-    await untilReading(id);
+    await untilRunning(id);
     await killed.kill();
     expect(await now(id)).toMatchObject({ state: 'running', attempt: 1 });
 
@@ -84,7 +84,7 @@ describe('a worker that is stopped in order', () => {
   it('gives its import back, and the try is not counted', async () => {
     const first = await startTestWorker(app);
     const { id } = await send(3, MANY_FRAMES);
-    await untilReading(id);
+    await untilRunning(id);
     await first.stop();
     expect(await now(id)).toMatchObject({ state: 'waiting', progress: 0 });
     expect(await jobsOf(id)).toMatchObject([{ attempts: 0, lockedBy: null }]);

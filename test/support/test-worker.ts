@@ -25,7 +25,7 @@ export async function startTestWorker(app: TestApp): Promise<TestWorker> {
     knex,
     tasks: taskList({ mail, log }),
     sweepMs: 200,
-    graceMs: 50,
+    graceMs: 1,
     log,
   });
   return {
