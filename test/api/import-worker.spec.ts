@@ -39,9 +39,7 @@ async function send(variant: number, frames: number): Promise<LogImport> {
 const now = async (id: string): Promise<LogImport> =>
   logImportSchema.parse((await cast.owner.get(importPaths.one(cast.rigId, id))).body);
 const untilRunning = (id: string) =>
-  expect
-    .poll(async () => (await now(id)).state, { timeout: 20_000, interval: 10 })
-    .toBe('running');
+  expect.poll(async () => (await now(id)).state, { timeout: 20_000, interval: 10 }).toBe('running');
 const jobsOf = (id: string) =>
   app.knex('graphile_worker._private_jobs').whereRaw(`payload->>'importId' = ?`, [id]);
 
