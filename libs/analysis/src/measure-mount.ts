@@ -1,8 +1,15 @@
 import { type Backlash, type PolarAlignment, type Run, type WhyMissing } from './analysis-document';
+import { findFindings } from './diagnosis/find-findings';
+import { type FindingContext } from './diagnosis/finding-context';
 import { type GuidedRun } from './listed-run';
+import { gainCurve } from './mount/gain-curve';
 import { measureMountMotion } from './mount/measure-mount-motion';
 import { type MountMotion } from './mount/mount-motion';
 import { polarAlignment } from './mount/polar-alignment';
+import { replayableAxis } from './mount/replay';
+import { runBudget } from './mount/run-budget';
+import { smallResponse } from './mount/small-response';
+import { describeOptics } from './optics/describe-optics';
 import { type RigDescription } from './rig-description';
 import { type RunSeries } from './series/run-series';
 
@@ -32,27 +39,42 @@ export interface MountMeasures {
   readonly uncorrectedDecArcsec: Float64Array | null;
 }
 
-const NOT_COMPUTED = 'This is not computed by this version.';
-
 /** The mount measures and findings of all analysed runs of a log together: polar alignment needs them side by side. */
 export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription): MountMeasures[] {
-  const motions = runs.map(({ series }) => measureMountMotion(series, rig));
+  const moved = runs.map((each) => ({ ...each, motion: measureMountMotion(each.series, rig) }));
+  const optics = describeOptics(rig);
+  const motions = moved.map(({ motion }) => motion);
   const polar = polarAlignments(runs, motions, rig.site?.latitudeDegrees ?? null);
-  return motions.map((motion) => {
+  return moved.map(({ run, series, motion }) => {
     const alignment = polar.of.get(motion) ?? null;
     const backlash = backlashOf(motion);
-    return {
-      measures: {
-        uncorrected: motion.uncorrected,
-        periodicError: motion.periodicError,
-        polarAlignment: alignment,
-        backlash,
-        response: motion.response,
-        loop: motion.loop,
-        seeingFloor: motion.seeingFloor,
-        budget: null,
-        findings: [],
+    const axes = {
+      ra: replayableAxis(series, motion, 'ra'),
+      dec: replayableAxis(series, motion, 'dec'),
+    };
+    const { budget, whyMissing: whyBudget } = runBudget(series, motion, axes, run.spectrum);
+    const context: FindingContext = {
+      rig,
+      optics,
+      gainCurves: {
+        ra: axes.ra && gainCurve(axes.ra, series),
+        dec: axes.dec && gainCurve(axes.dec, series),
       },
+      usualPeriodicErrorArcsec: null,
+      smallResponse: smallResponse(series, motion),
+    };
+    const measures = {
+      uncorrected: motion.uncorrected,
+      periodicError: motion.periodicError,
+      polarAlignment: alignment,
+      backlash,
+      response: motion.response,
+      loop: motion.loop,
+      seeingFloor: motion.seeingFloor,
+      budget,
+    };
+    return {
+      measures: { ...measures, findings: findFindings({ ...run, ...measures }, context) },
       whyMissing: {
         ...motion.whyMissing,
         ...(alignment === null
@@ -62,7 +84,7 @@ export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription):
         ...(backlash !== null && backlash.ms === null
           ? { 'backlash.ms': 'The corrections are logged in arcseconds.' }
           : {}),
-        budget: NOT_COMPUTED,
+        ...whyBudget,
       },
       uncorrectedRaArcsec: motion.ra.uncorrectedArcsec,
       uncorrectedDecArcsec: motion.dec.uncorrectedArcsec,

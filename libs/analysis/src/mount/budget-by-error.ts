@@ -1,4 +1,4 @@
-import { type BudgetPart, type Spectrum } from '../analysis-document';
+import { type BudgetPart, type Peak } from '../analysis-document';
 import { type UsedFrames } from '../series/used-frames';
 import { populationDeviation } from '../statistics/deviation';
 import { linearTrend } from '../statistics/linear-trend';
@@ -10,19 +10,20 @@ import { bumpsOf } from './bumps';
  * saw them, gusts and bumps; what the guider did about anything cannot be told. O(n).
  *
  * @param errorArcsec Of the frames that count.
+ * @param peaks Significant lines of that error.
  * @param why Why the corrections are not known.
  */
 export function budgetByError(
   used: UsedFrames,
   errorArcsec: Float64Array,
   cadenceSeconds: number,
-  spectrum: Spectrum,
+  peaks: readonly Peak[],
   why: string,
 ): AxisBudget {
   const total = populationDeviation(errorArcsec);
   const { slope } = linearTrend(used.timeSeconds, errorArcsec);
   const drift = slope * populationDeviation(used.timeSeconds);
-  const lines = spectrum.peaks.reduce((sum, peak) => sum + peak.amplitudeArcsec ** 2 / 2, 0);
+  const lines = peaks.reduce((sum, peak) => sum + peak.amplitudeArcsec ** 2 / 2, 0);
   const bumps = bumpsOf(errorArcsec, cadenceSeconds);
   const calm = errorArcsec.map((error, n) => error - (bumps[n] ?? 0));
   const sizes: Record<BudgetPart, number> = {

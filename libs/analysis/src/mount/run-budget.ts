@@ -1,10 +1,10 @@
-import { type Part, type Spectrum, type WhyMissing } from '../analysis-document';
+import { type Part, type Peak, type Run, type WhyMissing } from '../analysis-document';
 import { type RunSeries } from '../series/run-series';
 import { usedFrames } from '../series/used-frames';
 import { axisBudget, type AxisBudget } from './budget';
 import { budgetByError } from './budget-by-error';
 import { type MountMotion } from './mount-motion';
-import { replayableAxis } from './replay';
+import { type ReplayableAxis } from './replay';
 
 /** Budget of a run, and why parts of it are not told. */
 export interface RunBudget {
@@ -17,15 +17,21 @@ export interface RunBudget {
  * Error budget of both axes of a run: by replay where the corrections tell the star's own motion, else by the error alone.
  * O(n).
  *
+ * @param axes From `replayableAxis`.
  * @param spectrum Of the guided error, from the run's guiding measures.
  */
 export function runBudget(
   series: RunSeries,
   motion: MountMotion,
-  spectrum: { readonly ra: Spectrum; readonly dec: Spectrum },
+  axes: { readonly ra: ReplayableAxis | null; readonly dec: ReplayableAxis | null },
+  spectrum: Run['spectrum'],
 ): RunBudget {
-  const ra = budgetOf(series, motion, spectrum.ra, 'ra');
-  const dec = budgetOf(series, motion, spectrum.dec, 'dec');
+  const ra = axes.ra
+    ? replayedBudget(series, motion, axes.ra, 'ra')
+    : guessedBudget(series, motion, spectrum?.ra.peaks ?? [], 'ra');
+  const dec = axes.dec
+    ? replayedBudget(series, motion, axes.dec, 'dec')
+    : guessedBudget(series, motion, spectrum?.dec.peaks ?? [], 'dec');
   const reasons = [...reasonsOf('ra', ra), ...reasonsOf('dec', dec)];
   return {
     budget: { ra: ra.parts, dec: dec.parts },
@@ -33,34 +39,39 @@ export function runBudget(
   };
 }
 
-function budgetOf(
+function replayedBudget(
   series: RunSeries,
   motion: MountMotion,
-  spectrum: Spectrum,
+  replayable: ReplayableAxis,
   axis: 'ra' | 'dec',
 ): AxisBudget {
-  const replayable = replayableAxis(series, motion, axis);
-  if (replayable === null) {
-    const used = usedFrames(series);
-    return budgetByError(
-      used,
-      axis === 'ra' ? used.raErrorArcsec : used.decErrorArcsec,
-      series.cadenceSeconds,
-      spectrum,
-      motion.whyMissing[`uncorrected.${axis}`] ??
-        motion.whyMissing['uncorrected'] ??
-        'The corrections do not tell how this axis was guided.',
-    );
-  }
-  // RA is driven one way all night: its gap stays closed.
-  const gapUnknown = axis === 'dec' && 'why' in motion.decPlay;
+  const { decPlay } = motion;
   return axisBudget({
     axis: replayable,
     run: series,
     errorArcsec: axis === 'ra' ? series.raErrorArcsec : series.decErrorArcsec,
     noiseArcsec: motion[axis].noiseArcsec,
-    whyNoGap: gapUnknown && 'why' in motion.decPlay ? motion.decPlay.why : null,
+    // RA is driven one way all night: its gap stays closed.
+    whyNoGap: axis === 'dec' && 'why' in decPlay ? decPlay.why : null,
   });
+}
+
+function guessedBudget(
+  series: RunSeries,
+  motion: MountMotion,
+  peaks: readonly Peak[],
+  axis: 'ra' | 'dec',
+): AxisBudget {
+  const used = usedFrames(series);
+  return budgetByError(
+    used,
+    axis === 'ra' ? used.raErrorArcsec : used.decErrorArcsec,
+    series.cadenceSeconds,
+    peaks,
+    motion.whyMissing[`uncorrected.${axis}`] ??
+      motion.whyMissing['uncorrected'] ??
+      'The corrections do not tell how this axis was guided.',
+  );
 }
 
 function reasonsOf(axis: 'ra' | 'dec', { whyMissing }: AxisBudget): [string, string][] {
