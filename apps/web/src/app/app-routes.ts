@@ -30,6 +30,7 @@ export const routes: Routes = [
     title: 'Set a new password',
     loadComponent: () => import('./sign-in/reset-password-page').then((m) => m.ResetPasswordPage),
   },
+  { path: 'failed', title: 'Not loaded', component: FailedPage },
   {
     path: '',
     canActivate: [signedIn],
@@ -40,6 +41,10 @@ export const routes: Routes = [
         loadChildren: () => import('./nights/nights-routes').then((m) => m.nightsRoutes),
       },
       {
+        path: 'rigs/:rigId/import',
+        loadChildren: () => import('./import/import-routes').then((m) => m.importRoutes),
+      },
+      {
         path: 'rigs',
         loadChildren: () => import('./rigs/rigs-routes').then((m) => m.rigsRoutes),
       },
@@ -48,12 +53,11 @@ export const routes: Routes = [
         title: 'Account',
         loadComponent: () => import('./account/account-page').then((m) => m.AccountPage),
       },
+      {
+        path: '**',
+        title: 'Page not found',
+        loadComponent: () => import('./shell/not-found-page').then((m) => m.NotFoundPage),
+      },
     ],
-  },
-  { path: 'failed', title: 'Not loaded', component: FailedPage },
-  {
-    path: '**',
-    title: 'Page not found',
-    loadComponent: () => import('./shell/not-found-page').then((m) => m.NotFoundPage),
   },
 ];

@@ -9,7 +9,7 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
-import { Router } from '@angular/router';
+import { Router, RouterLink } from '@angular/router';
 import { type Rig } from '@stillpier/contract';
 import { sentenceOf } from '../api/problem-error';
 import { RigsApi } from '../api/rigs-api';
@@ -25,7 +25,7 @@ import { SetupList } from './setup-list';
 /** Mount, site, setups and column maps of a rig, and its end. */
 @Component({
   selector: 'app-rig-settings-page',
-  imports: [ColumnMapList, Failure, MatButton, RigForm, RigNotes, SetupList, Waiting],
+  imports: [ColumnMapList, Failure, MatButton, RigForm, RigNotes, RouterLink, SetupList, Waiting],
   templateUrl: './rig-settings-page.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { class: 'ruled', '(window:beforeunload)': 'warn($event)' },
