@@ -59,11 +59,34 @@ export function clockTicks(fromMs: number, toMs: number, most: number, timeZone:
   return ticks;
 }
 
+/** By how much the clock of a zone is ahead of UTC at an instant. */
 function zoneOffsetMs(epochMs: number, timeZone: string): number {
-  const parts = format(timeZone, { ...HOUR_MINUTE, second: '2-digit' }).formatToParts(epochMs);
-  const part = (type: string): number => Number(parts.find((p) => p.type === type)?.value);
-  const local = ((part('hour') * 60 + part('minute')) * 60 + part('second')) * 1000;
-  const ofDay = Math.floor(epochMs / 1000) * 1000;
-  const utc = ((ofDay % 86_400_000) + 86_400_000) % 86_400_000;
-  return local - utc;
+  return Date.parse(`${localDateTimeText(epochMs, timeZone)}Z`) - Math.floor(epochMs / 1000) * 1000;
+}
+
+/** `2026-11-28T18:42:15` at the site, as a date and time field takes it. */
+export function localDateTimeText(epochMs: number, timeZone: string): string {
+  const parts = format(timeZone, {
+    ...HOUR_MINUTE,
+    second: '2-digit',
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+  }).formatToParts(epochMs);
+  const part = (type: string): string => parts.find((each) => each.type === type)?.value ?? '';
+  return `${part('year')}-${part('month')}-${part('day')}T${part('hour')}:${part('minute')}:${part('second')}`;
+}
+
+/**
+ * The instant at which the clock of a zone shows a local date and time; of an hour that is shown twice the first. null
+ * for text that is no date and time.
+ */
+export function instantOfLocalTime(local: string, timeZone: string): number | null {
+  const asUtc = Date.parse(`${local}Z`);
+  if (Number.isNaN(asUtc)) return null;
+  const dayMs = 86_400_000;
+  const before = asUtc - zoneOffsetMs(asUtc - dayMs, timeZone);
+  const after = asUtc - zoneOffsetMs(asUtc + dayMs, timeZone);
+  const fitting = [before, after].filter((at) => at + zoneOffsetMs(at, timeZone) === asUtc);
+  return fitting.length > 0 ? Math.min(...fitting) : before;
 }

@@ -24,6 +24,14 @@ export function arcminText(arcmin: number): string {
   return `${fixed(arcmin, 1)}′`;
 }
 
+/** Two significant digits, down to 0.0001: for rates and standard errors, which are often small. */
+export function smallText(value: number | null): string {
+  if (value === null) return NO_VALUE;
+  const size = Math.abs(value);
+  const digits = size === 0 ? 2 : Math.max(0, 1 - Math.floor(Math.log10(size)));
+  return size >= 9.95 ? ratioText(value) : fixed(value, Math.min(4, digits));
+}
+
 /** With its sign, for a reading on an axis that goes both ways. */
 export function signedArcsecText(arcsec: number): string {
   const text = arcsecText(arcsec);

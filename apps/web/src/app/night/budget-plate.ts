@@ -16,7 +16,7 @@ import { runTitle, type ShownRun } from './shown-run';
         <app-budget-ruler [ra]="parts.ra" [dec]="parts.dec" />
         <figcaption>
           Each ruler is 100 % of that axis's mean square error about the lock position. Sizes add as
-          squares, so curing a part leaves more than a subtraction suggests; "leaves" is the RMS
+          squares, so curing a part leaves more than a subtraction suggests; “leaves” is the RMS
           that would remain without it.
         </figcaption>
       </figure>

@@ -1,5 +1,12 @@
 import type { Run } from '@stillpier/contract';
-import { arcminText, arcsecText, NO_VALUE, percentText, ratioText } from '../figures/measure-text';
+import {
+  arcminText,
+  arcsecText,
+  NO_VALUE,
+  percentText,
+  ratioText,
+  smallText,
+} from '../figures/measure-text';
 
 /** A measure of the mount as a line of text; a value that is missing has its reason in its place. */
 export interface MountMeasure {
@@ -30,7 +37,7 @@ const either = <Axis>(axis: Axis | null | undefined, text: (axis: Axis) => strin
   axis === null || axis === undefined ? NO_VALUE : text(axis);
 
 function perMinute(arcsecPerMinute: number, error: number): string {
-  return `${arcsecText(arcsecPerMinute)} ± ${arcsecText(error)} per min`;
+  return `${smallText(arcsecPerMinute)}″ ± ${smallText(error)}″ per min`;
 }
 
 function drift(run: Run): MountMeasure {
@@ -38,7 +45,7 @@ function drift(run: Run): MountMeasure {
   const left = (axis: typeof ra): string =>
     either(axis, (a) => perMinute(a.driftArcsecPerMinute, a.driftStandardError));
   const open = uncorrected
-    ? `Corrections undone: RA ${arcsecText(uncorrected.ra.driftArcsecPerMinute)}, Dec ${arcsecText(uncorrected.dec.driftArcsecPerMinute)} per min.`
+    ? `Corrections undone: RA ${smallText(uncorrected.ra.driftArcsecPerMinute)}″, Dec ${smallText(uncorrected.dec.driftArcsecPerMinute)}″ per min.`
     : missing(run, 'uncorrected');
   return { name: 'Drift left after guiding', ra: left(ra), dec: left(dec), note: open };
 }
@@ -110,7 +117,7 @@ function gain(run: Run): MountMeasure {
   const text = (axis: Axis): string =>
     axis.gain === null
       ? NO_VALUE
-      : `${ratioText(axis.gain)} ± ${ratioText(axis.gainStandardError)}`;
+      : `${ratioText(axis.gain)} ± ${smallText(axis.gainStandardError)}`;
   const best = [ra, dec].map((axis) => ratioText(axis?.bestGain ?? null));
   return {
     name: 'Gain of the corrections',

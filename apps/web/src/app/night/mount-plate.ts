@@ -20,12 +20,13 @@ import { runTitle, type ShownRun } from './shown-run';
       </thead>
       <tbody>
         @for (measure of measures(); track measure.name) {
-          <tr>
-            <th scope="row">
-              {{ measure.name }}<small>{{ measure.note }}</small>
-            </th>
+          <tr class="values">
+            <th scope="row">{{ measure.name }}</th>
             <td class="r">{{ measure.ra }}</td>
             <td class="r">{{ measure.dec }}</td>
+          </tr>
+          <tr class="why">
+            <td colspan="3">{{ measure.note }}</td>
           </tr>
         }
       </tbody>
@@ -34,7 +35,21 @@ import { runTitle, type ShownRun } from './shown-run';
   styles: `
     :host {
       display: block;
-      overflow-x: auto;
+    }
+    .table .values > * {
+      padding-bottom: 0;
+      border-bottom: 0;
+    }
+    .table .why > td {
+      padding-top: 0;
+      font-size: 13px;
+      line-height: 17px;
+      color: var(--ink-2);
+    }
+    @media (max-width: 700px) {
+      .table td.r {
+        white-space: normal;
+      }
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

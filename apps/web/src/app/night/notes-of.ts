@@ -9,6 +9,11 @@ import { figureOf, type Figure } from './finding-names';
   selector: 'app-notes-of',
   imports: [Severity],
   templateUrl: './notes-of.html',
+  styles: `
+    .caution {
+      margin-top: 10px;
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { role: 'complementary', '[attr.aria-label]': 'label()' },
 })

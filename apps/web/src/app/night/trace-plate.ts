@@ -34,6 +34,9 @@ export class TracePlate {
     const { frames, used } = this.run();
     return `${countText(frames - used)} of ${countText(frames)}`;
   });
+  protected readonly why = computed(
+    () => this.run().whyMissing['ra'] ?? 'The run has no error in arcseconds.',
+  );
   protected readonly label = computed(() => {
     const { ra, dec } = this.run();
     const rms = `RA ${arcsecText(ra?.rmsArcsec ?? null)} and Dec ${arcsecText(dec?.rmsArcsec ?? null)} RMS`;

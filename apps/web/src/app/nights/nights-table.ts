@@ -62,6 +62,11 @@ export class NightsTable {
   protected readonly percent = percentText;
   protected readonly ratio = ratioText;
 
+  /** A name does not break across lines. */
+  protected targetsOf({ targets }: NightSummary): string {
+    return targets.map((target) => target.replaceAll(' ', '\u00a0')).join(' · ');
+  }
+
   protected limitName({ mainLimit }: NightSummary): string {
     return mainLimit ? FINDING_NAMES[mainLimit.code] : 'no verdict';
   }

@@ -21,7 +21,7 @@ import {
 
 const MOST_NAMES = 6;
 /** Room over the highest peak for its name. */
-const HEADROOM = 1.42;
+const HEADROOM = 1.35;
 const CHARACTER_PX = 7.3;
 
 export interface SpectrumPeak {
@@ -61,12 +61,13 @@ export class SpectrumChart {
   private readonly frame = computed((): SpectrumFrame => {
     const { periodSeconds, raAmplitudeArcsec, decAmplitudeArcsec } = this.held();
     const highest = Math.max(1e-3, ...raAmplitudeArcsec, ...decAmplitudeArcsec);
-    const topArcsec = HEADROOM * (this.topArcsec() ?? highest);
+    const needed = HEADROOM * (this.topArcsec() ?? highest);
+    const stepArcsec = roundStep(needed, 5);
     return {
       fromSeconds: periodSeconds[0] ?? 1,
       toSeconds: periodSeconds.at(-1) ?? 10,
-      topArcsec,
-      stepArcsec: roundStep(topArcsec, 5),
+      topArcsec: stepArcsec * Math.ceil(needed / stepArcsec),
+      stepArcsec,
     };
   });
   private readonly xPx = computed(() => {

@@ -60,7 +60,6 @@ export function spectrumOptions(
       axisTick: { show: false },
       axisLabel: {
         ...label,
-        showMaxLabel: false,
         formatter: (arcsec: number) => (arcsec === 0 ? '0' : `${Number(arcsec.toPrecision(2))}″`),
       },
       splitLine: { lineStyle: { color: colours.ruleStrong, type: [1, 3] } },

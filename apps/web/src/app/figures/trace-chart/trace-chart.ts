@@ -240,7 +240,7 @@ export class TraceChart {
 
   private readonly ticks = computed(() => {
     const { fromSeconds, toSeconds } = this.sight();
-    const most = Math.max(3, Math.floor(this.plotPx() / 90));
+    const most = Math.max(3, Math.floor(this.plotPx() / 72));
     const startMs = this.startMs();
     // Without a time of day the axis counts hours from the start of the run.
     const zeroMs = startMs ?? 0;

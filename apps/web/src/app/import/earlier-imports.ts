@@ -1,0 +1,38 @@
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
+import { importPaths, type LogImport } from '@stillpier/contract';
+import { dayText, localDateTimeText } from '../figures/clock';
+import { bytesText } from '../figures/measure-text';
+import { Severity } from '../page/severity';
+import { stateOfImport } from './file-list';
+
+/** What was sent to the rig before, newest first. */
+@Component({
+  selector: 'app-earlier-imports',
+  imports: [MatButton, RouterLink, Severity],
+  templateUrl: './earlier-imports.html',
+  styleUrl: './earlier-imports.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class EarlierImports {
+  readonly rigId = input.required<string>();
+  readonly imports = input.required<readonly LogImport[]>();
+  readonly timeZone = input.required<string>();
+  readonly mayUpload = input.required<boolean>();
+  readonly mayDelete = input.required<boolean>();
+  readonly readAgain = output<LogImport>();
+  readonly remove = output<LogImport>();
+
+  protected readonly rows = computed(() =>
+    this.imports().map((of) => ({
+      of,
+      added: dayText(localDateTimeText(Date.parse(of.createdAt), this.timeZone()).slice(0, 10)),
+      size: bytesText(of.sizeBytes),
+      state: stateOfImport(of),
+      original: importPaths.original(this.rigId(), of.id),
+    })),
+  );
+
+  protected readonly day = dayText;
+}

@@ -1,0 +1,51 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { secondsText } from '../figures/measure-text';
+import { cadenceSeconds } from './cadence';
+import { delimiterWord, UNIT_WORDS } from './column-words';
+import type { Intake } from './intake';
+
+/** How a file is written, as it was found out. */
+@Component({
+  selector: 'app-how-read',
+  template: `
+    <h3>How the file is read</h3>
+    <dl class="gain">
+      @for (fact of facts(); track fact.name) {
+        <dt>{{ fact.name }}</dt>
+        <dd>{{ fact.value }}</dd>
+      }
+    </dl>
+  `,
+  styles: `
+    h3 {
+      font: 620 15.5px/22px var(--text);
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class HowRead {
+  readonly intake = input.required<Intake>();
+
+  protected readonly facts = computed(() => {
+    const { preview, choices, headerCells, needsStart } = this.intake();
+    if (!preview) return [];
+    const time = choices.find(({ role }) => role === 'time')?.unit;
+    const cadence = cadenceSeconds(preview, choices);
+    return [
+      { name: 'Delimiter', value: delimiterWord(preview.delimiter) },
+      { name: 'Decimal mark', value: preview.decimal === ',' ? 'comma' : 'point' },
+      {
+        name: 'Header',
+        value:
+          preview.headerLine === null
+            ? 'none'
+            : `line ${preview.headerLine}, ${headerCells.length} names`,
+      },
+      ...(time
+        ? [{ name: 'Time', value: UNIT_WORDS[time] + (needsStart ? ', no date' : '') }]
+        : []),
+      ...(cadence === null ? [] : [{ name: 'Cadence', value: secondsText(cadence) }]),
+      { name: 'Encoding', value: preview.encoding },
+    ];
+  });
+}

@@ -1,0 +1,8 @@
+import { type Routes } from '@angular/router';
+import { ImportPage } from './import-page';
+import { stayWhileSending } from './stay-while-sending';
+
+/** Under rigs/:rigId/import. */
+export const importRoutes: Routes = [
+  { path: '', title: 'Add logs', component: ImportPage, canDeactivate: [stayWhileSending] },
+];
