@@ -29,7 +29,7 @@ const GRAVEST_FIRST: readonly Finding['severity'][] = ['act', 'watch', 'fine'];
 export function findFindings(run: MeasuredRun, context: FindingContext): Finding[] {
   if (run.total === null) return [];
   const short = tooShort(run, context);
-  const drafts = [
+  const withoutSeeing = [
     ...periodicErrorFindings(run, context),
     ...lineFindings(run, context),
     ...driftFindings(run, context),
@@ -42,12 +42,14 @@ export function findFindings(run: MeasuredRun, context: FindingContext): Finding
     ...responseOffFindings(run),
     ...gustFindings(run, context),
     ...starLostFindings(run),
-    ...seeingFindings(run),
     ...guideScaleFindings(context),
     ...samplingFindings(context),
     ...correlationFindings(run),
   ].map((draft) => heldBySky(draft, run, short.length > 0));
-  const found = [...drafts, ...short];
+  const mountIsClear = withoutSeeing.every(
+    ({ onMount, severity }) => !onMount || severity === 'fine',
+  );
+  const found = [...withoutSeeing, ...seeingFindings(run, mountIsClear), ...short];
   return (found.length === 0 ? nothingFound(run.total.rmsArcsec) : found)
     .sort((a, b) => rank(a) - rank(b) || cured(a) - cured(b))
     .map(({ code, severity, sentence, evidence, nextStep, gain, caution }) => ({

@@ -14,6 +14,11 @@ import { CLEAR_SIGMAS, THRESHOLDS } from './thresholds';
 
 const BALANCE =
   'Hold the tube before releasing a clutch; take counterweights off last, with the safety stop in place.';
+/** Common practice, no source. */
+const HEALTHY_GAIN = 0.7;
+const LOWEST_ADVISED_GAIN = 0.4;
+/** Above it a loop answers more than the whole error: never advised. */
+const HIGHEST_ADVISED_GAIN = 1;
 const AXES = ['ra', 'dec'] as const;
 
 /** A loop that answers more than the whole error. */
@@ -39,12 +44,17 @@ export function overCorrectionFindings(run: MeasuredRun, context: FindingContext
         nextStep:
           loop.bestGain === null || loop.gain === null
             ? `Lower the ${name} aggressiveness by a third.`
-            : `Lower the ${name} aggressiveness to ${percent(Math.min(1, loop.bestGain / loop.gain))} of what it is.`,
+            : `Lower the ${name} aggressiveness to ${percent(calmer(loop.bestGain) / loop.gain)} of what it is.`,
         gain: part === null ? null : gainIfCured(run, context, { [axis]: part.rmsArcsec ** 2 }),
         caution: null,
       },
     ];
   });
+}
+
+/** A gain to aim at: the best one, but never so low that a gust or a dither is left to itself, nor above a healthy one. */
+function calmer(bestGain: number): number {
+  return Math.min(HEALTHY_GAIN, Math.max(LOWEST_ADVISED_GAIN, bestGain));
 }
 
 /** A loop too soft for what the mount does, by replay. */
@@ -53,21 +63,25 @@ export function underCorrectionFindings(run: MeasuredRun, context: FindingContex
     const curve = context.gainCurves[axis];
     const gain = run.loop[axis]?.gain ?? null;
     const measured = run[axis];
-    if (curve === null || gain === null || measured === null || gain >= curve.bestGain) return [];
-    const loss = 1 - curve.bestRmsArcsec / measured.rmsArcsec;
+    if (curve === null || gain === null || measured === null) return [];
+    const best = curve.points
+      .filter((point) => point.gain <= HIGHEST_ADVISED_GAIN)
+      .reduce((least, point) => (point.rmsArcsec < least.rmsArcsec ? point : least));
+    if (gain >= best.gain) return [];
+    const loss = 1 - best.rmsArcsec / measured.rmsArcsec;
     const severity = severityOf(loss, THRESHOLDS.gainLoss);
     if (severity === 'fine') return [];
     const name = AXIS_NAMES[axis];
-    const off = measured.rmsArcsec ** 2 - curve.bestRmsArcsec ** 2;
+    const off = measured.rmsArcsec ** 2 - best.rmsArcsec ** 2;
     return [
       {
         axis,
         onMount: true,
         code: 'under-correction',
         severity,
-        sentence: `${name} guiding is too soft: at a gain of ${ratio(curve.bestGain)} RMS would fall from ${arcsec(measured.rmsArcsec)} to ${arcsec(curve.bestRmsArcsec)}.`,
+        sentence: `${name} guiding is too soft: at a gain of ${ratio(best.gain)} RMS would fall from ${arcsec(measured.rmsArcsec)} to ${arcsec(best.rmsArcsec)}.`,
         evidence: [`The gain was ${ratio(gain)}; predicted by replay of the night.`],
-        nextStep: `Raise the ${name} aggressiveness step by step towards ${percent(curve.bestGain / gain)} of what it is.`,
+        nextStep: `Raise the ${name} aggressiveness step by step towards ${percent(best.gain / gain)} of what it is.`,
         gain: gainIfCured(run, context, { [axis]: off }),
         caution: null,
       },

@@ -1,6 +1,7 @@
 import { type BudgetPart } from '../analysis-document';
 import { type AxisName, type MeasuredRun } from './finding-context';
-import { arcsec, AXIS_NAMES } from './numbers-in-words';
+import { guidedLines } from './guided-lines';
+import { arcsec, AXIS_NAMES, seconds } from './numbers-in-words';
 import { THRESHOLDS } from './thresholds';
 
 /** A piece of a sentence; numbers are strong, so that a page can set them bold. */
@@ -9,16 +10,14 @@ export interface SentencePiece {
   readonly strong: boolean;
 }
 
+/** One name for both axes: what happens to one happens to the other. */
+const GUSTS = 'Gusts and bumps';
+
 /** What brought so much of the variance of all frames. */
 interface Cause {
   readonly name: string;
   readonly share: number;
 }
-
-/** Causes that have one name for both axes: what happens to one happens to the other. */
-const OF_BOTH_AXES: Partial<Record<BudgetPart, string>> = {
-  'gusts and bumps': 'Gusts and bumps',
-};
 
 /**
  * The one sentence at the top of a night: the cause first, its size, what curing it would gain. Over all runs given, each
@@ -72,7 +71,9 @@ function skyLimited(floorArcsec: number, rmsArcsec: number): SentencePiece[] {
 
 function limitedBy({ name, share }: Cause, rmsArcsec: number): SentencePiece[] {
   return [
-    plain(`${name} limited this night: without it RMS would fall from `),
+    plain(
+      `${name} limited this night: without ${name === GUSTS ? 'them' : 'it'} RMS would fall from `,
+    ),
     strong(arcsec(rmsArcsec)),
     plain(' to '),
     strong(arcsec(rmsArcsec * Math.sqrt(Math.max(0, 1 - share)))),
@@ -94,8 +95,9 @@ function causesOf(runs: readonly MeasuredRun[], squares: number) {
           told ||= share > 0;
           continue;
         }
-        const name = nameOf(part, axis);
-        shares.set(name, (shares.get(name) ?? 0) + share * ofAll);
+        for (const cause of namedCauses(run, part, share, axis)) {
+          shares.set(cause.name, (shares.get(cause.name) ?? 0) + cause.share * ofAll);
+        }
       }
     }
   }
@@ -105,9 +107,24 @@ function causesOf(runs: readonly MeasuredRun[], squares: number) {
   return { floor, told, causes };
 }
 
-function nameOf(part: BudgetPart, axis: AxisName): string {
-  if (part === 'periodic error' && axis === 'dec') return 'A periodic motion in Dec';
-  return OF_BOTH_AXES[part] ?? `${AXIS_NAMES[axis]} ${part}`;
+/** A part of one axis under the names that it has for people; lines are the worm's or those of another gear. */
+function namedCauses(run: MeasuredRun, part: BudgetPart, share: number, axis: AxisName): Cause[] {
+  if (part === 'gusts and bumps') return [{ name: GUSTS, share }];
+  const name = `${AXIS_NAMES[axis]} ${part}`;
+  const lines = part === 'periodic error' ? guidedLines(run, axis) : null;
+  if (lines === null) return [{ name, share }];
+  const { worm, otherShare, strongestOther } = lines;
+  if (strongestOther === null) {
+    return [{ name: axis === 'ra' ? name : 'A periodic motion in Dec', share: worm.share }];
+  }
+  const other =
+    strongestOther.label === null
+      ? `${AXIS_NAMES[axis]} motion every ${seconds(strongestOther.periodSeconds)}`
+      : `The ${strongestOther.label} in ${AXIS_NAMES[axis]}`;
+  return [
+    { name, share: worm.share },
+    { name: other, share: otherShare },
+  ];
 }
 
 const plain = (text: string): SentencePiece => ({ text, strong: false });

@@ -7,13 +7,16 @@ import {
   gravest,
   mildest,
   type MeasuredRun,
-  partOf,
   partSeverity,
   rmsThreshold,
   severityOf,
 } from './finding-context';
+import { guidedLines, isWorms } from './guided-lines';
 import { arcsec, AXIS_NAMES, percent, ratio, roundArcsec, seconds } from './numbers-in-words';
 import { THRESHOLDS } from './thresholds';
+
+/** Of the best harmonic of eight: a night without periodic error reaches three too often. */
+const SEEN_SIGMAS = 4;
 
 const GEARS =
   'Switch the power off before hands go near gears. Opening a gearbox can void a warranty: follow the maker’s manual.';
@@ -21,9 +24,10 @@ const GEARS =
 /** Periodic error of the worm: smooth, steep or growing. */
 export function periodicErrorFindings(run: MeasuredRun, context: FindingContext): Draft[] {
   const { periodicError } = run;
-  const part = partOf(run, 'ra', 'periodic error');
-  if (periodicError === null || part === null) return [];
+  const part = guidedLines(run, 'ra')?.worm;
+  if (periodicError === null || part === undefined) return [];
   const { peakToPeakArcsec, steepestArcsecPerSecond, harmonics, periodSeconds } = periodicError;
+  if (!harmonics.some((line) => line.amplitudeArcsec > SEEN_SIGMAS * line.standardError)) return [];
   const usual = context.usualPeriodicErrorArcsec;
   const growth = usual === null ? 0 : peakToPeakArcsec / usual;
   const growing = growth >= THRESHOLDS.growth.watch;
@@ -43,7 +47,7 @@ export function periodicErrorFindings(run: MeasuredRun, context: FindingContext)
           ? `RA periodic error of ${size} is guided out: ${arcsec(part.rmsArcsec)} RMS is left.`
           : `RA periodic error of ${size} leaves ${arcsec(part.rmsArcsec)} RMS after guiding.`,
       evidence: [
-        `Worm ${seconds(periodSeconds)}, ${harmonics.length} harmonics, ${percent(part.share)} of RA.`,
+        `Worm ${seconds(periodSeconds)}; ${percent(part.share)} of the RA error.`,
         `Steepest ${ratio(steepestArcsecPerSecond)}″ a second.`,
       ],
       nextStep: nextStepFor(growing, steep, harm),
@@ -65,7 +69,7 @@ function nextStepFor(growing: boolean, steep: boolean, harm: Draft['severity']):
 export function lineFindings(run: MeasuredRun, context: FindingContext): Draft[] {
   return (['ra', 'dec'] as const).flatMap((axis) =>
     (run.spectrum?.[axis].peaks ?? [])
-      .filter(({ label }) => !label?.startsWith('worm'))
+      .filter((peak) => !isWorms(peak))
       .map((peak) => lineFinding(run, context, axis, peak))
       .filter(({ severity }) => severity !== 'fine'),
   );
@@ -86,14 +90,16 @@ function lineFinding(run: MeasuredRun, context: FindingContext, axis: AxisName, 
     ),
     sentence:
       peak.label === null
-        ? `${name} swings by ${size} every ${period}, and no gear of the rig has that period.`
+        ? `${name} swings by ${size} every ${period}, which no gear of the rig does.`
         : `The ${peak.label} swings ${name} by ${size} every ${period}.`,
     evidence: [
-      `${percent(peak.share)} of the ${name} error; a period that fits is a hint, no proof.`,
+      peak.label === null
+        ? `${percent(peak.share)} of the ${name} error.`
+        : `${percent(peak.share)} of the ${name} error; a period that fits is a hint, no proof.`,
     ],
     nextStep:
       peak.label === null
-        ? 'Compare with the periods of pulleys, bearings and fans, and enter them in the rig.'
+        ? 'Compare the period with pulleys, bearings and fans, and enter what fits in the rig.'
         : `Inspect the ${peak.label}.`,
     gain: gainIfCured(run, context, { [axis]: rms ** 2 }),
     caution: GEARS,

@@ -40,6 +40,9 @@ export function driftFindings(run: MeasuredRun, context: FindingContext): Draft[
   });
 }
 
+/** Refraction alone passes for so much. */
+const WORTH_SAYING_ARCMIN = 1;
+
 /** The polar axis: how far off, and what that does to a sub. */
 export function polarFindings(run: MeasuredRun, context: FindingContext): Draft[] {
   const { polarAlignment, uncorrected } = run;
@@ -50,6 +53,8 @@ export function polarFindings(run: MeasuredRun, context: FindingContext): Draft[
     uncorrected.dec.driftStandardError / LARGEST_POLAR_DRIFT_PER_ARCMIN;
   const size = solved?.totalArcmin ?? atLeastArcmin;
   if (size < CLEAR_SIGMAS * error) return [];
+  const severity = polarSeverity(size, solved !== null, run, context);
+  if (severity === 'fine' && size < WORTH_SAYING_ARCMIN) return [];
   const drift = ratio(Math.abs(uncorrected.dec.driftArcsecPerMinute));
   const turn = (value: number, plus: string, minus: string) =>
     `${arcmin(Math.abs(value))} ${value > 0 ? minus : plus}`;
@@ -58,7 +63,7 @@ export function polarFindings(run: MeasuredRun, context: FindingContext): Draft[
       axis: null,
       onMount: true,
       code: 'polar-alignment',
-      severity: polarSeverity(size, solved !== null, run, context),
+      severity,
       sentence:
         solved === null
           ? `The polar axis is off by at least ${arcmin(size)}.`

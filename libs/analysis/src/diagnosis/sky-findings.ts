@@ -68,8 +68,12 @@ export function floorShare(run: MeasuredRun): number | null {
   return (ra.rmsArcsec ** 2 + dec.rmsArcsec ** 2) / run.total.rmsArcsec ** 2;
 }
 
-/** A night on which the sky set the limit. */
-export function seeingFindings(run: MeasuredRun): Draft[] {
+/**
+ * A night on which the sky set the limit.
+ *
+ * @param mountIsClear Whether no finding asks for work on the mount.
+ */
+export function seeingFindings(run: MeasuredRun, mountIsClear: boolean): Draft[] {
   const share = floorShare(run);
   if (share === null || run.total === null || share < THRESHOLDS.floorShare.watch) return [];
   const { rmsArcsec } = run.total;
@@ -81,7 +85,9 @@ export function seeingFindings(run: MeasuredRun): Draft[] {
       severity: 'fine',
       sentence: `Seeing limited this run: ${arcsec(Math.sqrt(share) * rmsArcsec)} of the ${arcsec(rmsArcsec)} RMS.`,
       evidence: [`${percent(share)} of the variance changes from frame to frame.`],
-      nextStep: 'Leave the mount alone: nothing in it is worth a screwdriver tonight.',
+      nextStep: mountIsClear
+        ? 'Leave the mount alone: nothing in it is worth a screwdriver tonight.'
+        : 'Look again after a night of better seeing before working on the mount.',
       gain: null,
       caution: null,
     },
