@@ -18,6 +18,7 @@ const STAYING_PART = 0.5;
  * @param given The frames that may count at all.
  * @param frames The same as the fit before used them.
  * @param residual What that fit left of the series, n values.
+ * @returns `frames` itself when nothing changes.
  */
 export function withoutBumps(
   given: LevelFrames,
@@ -44,6 +45,10 @@ export function withoutBumps(
     if (fading > 0) used[n] = 0;
     fading--;
   }
+  const isSame =
+    restarts.size === frames.restartFrames.length &&
+    used.every((value, n) => value === frames.used[n]);
+  if (isSame) return frames;
   return { ...frames, used, restartFrames: [...restarts].sort((a, b) => a - b) };
 }
 

@@ -1,5 +1,5 @@
 import { goldenSection } from './golden-section';
-import { type LevelFrames, whitenedLeastSquares } from './whitened-least-squares';
+import { type LevelFrames, whitenedCost } from './whitened-least-squares';
 
 /** Natural logarithms of the walk's variance a frame over the noise's: from a level that stands still to one that is all there is. */
 const LOWEST = Math.log(1e-8);
@@ -39,7 +39,7 @@ export function likeliestWalk(
   const windowSeries = part(series);
   const walk = (logarithm: number) => Math.exp(logarithm) / frames.cadenceSeconds;
   const cost = (logarithm: number) =>
-    whitenedLeastSquares(window, walk(logarithm), windowColumns, windowSeries).cost;
+    whitenedCost(window, walk(logarithm), windowColumns, windowSeries);
   let best = LOWEST;
   let bestCost = cost(LOWEST);
   for (let trial = 1; trial <= COARSE_TRIALS; trial++) {

@@ -66,11 +66,12 @@ export function fitMotion(input: MotionFitInput): MotionFit {
   const span = (input.frames.timeSeconds.at(-1) ?? 0) - (input.frames.timeSeconds[0] ?? 0);
   let frames = input.frames;
   let lines: readonly FittedLine[] = input.startLines;
-  let walkPerSecond = 0;
-  let isNewModel = true;
   for (let pass = 1; ; pass++) {
     const { columns, places } = designMatrix(frames, commands, lines);
-    if (isNewModel) walkPerSecond = likeliestWalk(frames, columns, series);
+    // How the rest wanders hardly depends on the last digits of the frequencies: their columns are left out.
+    const plainLines = lines.map((line) => newLine(line.frequency));
+    const plain = designMatrix(frames, commands, plainLines).columns;
+    const walkPerSecond = likeliestWalk(frames, plain, series);
     const fit = whitenedLeastSquares(frames, walkPerSecond, columns, series);
     const refined = lines.map((line, i) => lineFrom(line, fit, places[i] ?? 0, span));
     const moved = refined.some(
@@ -79,20 +80,20 @@ export function fitMotion(input: MotionFitInput): MotionFit {
     const unrefined = lines.some((line) => line.amplitude === 0);
     const found = pass < MOST_PASSES - 2 ? newLines(frames, fit, refined, span) : [];
     const credible = refined.filter((line) => isCredible(line, span));
+    const calm = withoutBumps(
+      input.frames,
+      frames,
+      fit.innovations,
+      residualOf(series, columns, fit),
+    );
     lines = [...credible, ...found];
-    const last =
-      pass >= MOST_PASSES ||
-      (found.length === 0 &&
-        !moved &&
-        !unrefined &&
-        credible.length === refined.length &&
-        pass > 1);
-    if (last) {
+    const settled =
+      found.length === 0 && !moved && !unrefined && credible.length === refined.length;
+    if ((settled && calm === frames) || pass >= MOST_PASSES) {
       const solve = (walk: number) => whitenedLeastSquares(frames, walk, columns, series);
       return described(frames, walkPerSecond, fit, commands.length, lines, solve);
     }
-    isNewModel = pass === 1 || found.length > 0 || moved || unrefined;
-    frames = withoutBumps(input.frames, frames, fit.innovations, residualOf(series, columns, fit));
+    frames = calm;
   }
 }
 

@@ -60,13 +60,37 @@ export function whitenedLeastSquares(
     innovations,
     squaresByColumns: solved.squaresByColumns,
     count: whitening.count,
-    cost: whitening.count * Math.log(squares) + whitening.logDeterminant,
+    cost: costOf(whitening, squares),
   };
 }
 
-function solveNormal(columns: readonly Float64Array[], y: Float64Array) {
+/**
+ * Minus twice the logarithm of a fit's likelihood, but for a constant, as `whitenedLeastSquares` gives it: for trials
+ * of the walk that need nothing else. O(n p²).
+ */
+export function whitenedCost(
+  frames: LevelFrames,
+  walkPerSecond: number,
+  columns: readonly Float64Array[],
+  series: Float64Array,
+): number {
+  const whitening = new LevelWhitening({ ...frames, walkPerSecond });
+  const white = (values: Float64Array) => whitening.whiten(values, new Float64Array(values.length));
+  const { squaresByColumns } = normalTriangle(columns.map(white), white(series));
+  return costOf(whitening, squaresByColumns.at(-1) ?? 0);
+}
+
+/** A residual of nothing at all has no likelihood: the smallest number keeps its logarithm finite. */
+function costOf(whitening: LevelWhitening, squares: number): number {
+  const { count, logDeterminant } = whitening;
+  return count * Math.log(Math.max(squares, Number.MIN_VALUE)) + logDeterminant;
+}
+
+/** Cholesky's triangle of the normal equations, the columns scaled to one length. */
+function normalTriangle(columns: readonly Float64Array[], y: Float64Array) {
   const p = columns.length;
-  const scale = columns.map((column) => 1 / Math.sqrt(dot(column, column) || 1));
+  const lengths = columns.map((column) => Math.sqrt(dot(column, column)));
+  const scale = lengths.map((length) => 1 / (length || 1));
   // Row p of the triangle holds y: its elimination gives the sums of squares left over.
   const lower = new Float64Array((p + 1) * (p + 1));
   const entry = (i: number, j: number) => lower[i * (p + 1) + j] ?? 0;
@@ -77,18 +101,26 @@ function solveNormal(columns: readonly Float64Array[], y: Float64Array) {
     const column = columns[j] ?? y;
     let square = 1;
     for (let k = 0; k < j; k++) square -= entry(j, k) ** 2;
-    const kept = square > DEPENDENT_PART && dot(column, column) > 0;
+    const kept = square > DEPENDENT_PART && (lengths[j] ?? 0) > 0;
     const diagonal = kept ? Math.sqrt(square) : 0;
     lower[j * (p + 1) + j] = diagonal;
-    for (let i = j + 1; i <= p; i++) {
-      if (!kept) continue;
-      let value = dot(columns[i] ?? y, column) * (scale[j] ?? 0) * (scale[i] ?? 1);
-      for (let k = 0; k < j; k++) value -= entry(i, k) * entry(j, k);
-      lower[i * (p + 1) + j] = value / diagonal;
+    if (kept) {
+      const products = dots(column, columns, y, j + 1);
+      for (let i = j + 1; i <= p; i++) {
+        let value = (products[i - j - 1] ?? 0) * (scale[j] ?? 0) * (scale[i] ?? 1);
+        for (let k = 0; k < j; k++) value -= entry(i, k) * entry(j, k);
+        lower[i * (p + 1) + j] = value / diagonal;
+      }
     }
     left -= entry(p, j) ** 2;
     squaresByColumns[j + 1] = Math.max(0, left);
   }
+  return { entry, scale, squaresByColumns };
+}
+
+function solveNormal(columns: readonly Float64Array[], y: Float64Array) {
+  const p = columns.length;
+  const { entry, scale, squaresByColumns } = normalTriangle(columns, y);
   const inverse = invertTriangle(entry, p);
   const coefficients = new Float64Array(p);
   const full = new Float64Array(p * p);
@@ -120,6 +152,30 @@ function invertTriangle(entry: (i: number, j: number) => number, p: number): Flo
     }
   }
   return inverse;
+}
+
+/** Products of one column with the columns from `first` on and with y, four at a time: the column is read once for all four. */
+function dots(
+  column: Float64Array,
+  columns: readonly Float64Array[],
+  y: Float64Array,
+  first: number,
+): number[] {
+  const others = [...columns.slice(first), y];
+  const products: number[] = [];
+  for (let at = 0; at < others.length; at += 4) {
+    const [a = y, b = a, c = a, d = a] = others.slice(at, at + 4);
+    let [sumA, sumB, sumC, sumD] = [0, 0, 0, 0];
+    for (let n = 0; n < column.length; n++) {
+      const value = column[n] ?? 0;
+      sumA += value * (a[n] ?? 0);
+      sumB += value * (b[n] ?? 0);
+      sumC += value * (c[n] ?? 0);
+      sumD += value * (d[n] ?? 0);
+    }
+    products.push(sumA, sumB, sumC, sumD);
+  }
+  return products;
 }
 
 function dot(a: Float64Array, b: Float64Array): number {
