@@ -26,6 +26,7 @@ import { TimeZoneField } from './time-zone-field';
   selector: 'app-rig-form',
   imports: [Field, FieldInput, FormMessage, MatButton, ReactiveFormsModule, TimeZoneField],
   templateUrl: './rig-form.html',
+  styles: ':host { display: block; }',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class RigForm {

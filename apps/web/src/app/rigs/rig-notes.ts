@@ -24,6 +24,6 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
     </div>
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { class: 'margin', role: 'complementary', 'aria-label': 'Notes' },
+  host: { class: 'margin', role: 'complementary', 'aria-label': 'Notes on the rig' },
 })
 export class RigNotes {}

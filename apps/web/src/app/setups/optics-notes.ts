@@ -28,9 +28,15 @@ import { type Reading } from './optics-readings';
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { class: 'margin', role: 'complementary', 'aria-label': 'What follows from it' },
+  host: {
+    class: 'margin',
+    role: 'complementary',
+    '[attr.aria-label]': '"What follows, " + about()',
+  },
 })
 export class OpticsNotes {
+  /** Imaging, guiding or sky: tells the margins of the page apart. */
+  readonly about = input.required<string>();
   readonly readings = input.required<readonly Reading[]>();
   protected readonly none = NO_VALUE;
 }
