@@ -37,7 +37,10 @@ export function withoutBumps(
     const isBump = Math.abs(innovations[n] ?? 0) > limit;
     if (isBump && stays(residual, given.used, n)) {
       restarts.add(n);
-      used[n] = 1;
+      // The innovations that follow are measured from the old level: the next fit tells them anew.
+      const last = Math.min(n + SIDE_FRAMES, used.length - 1);
+      for (; n <= last; n++) used[n] = given.used[n] ?? 0;
+      n = last;
       fading = 0;
       continue;
     }

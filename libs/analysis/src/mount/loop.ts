@@ -34,13 +34,15 @@ export function loopGain(
   commandArcsec: Float64Array,
   relativeResponseError: number,
 ): LoopGain | null {
-  const limit = correctionLimit(commandArcsec);
+  const answered = commandArcsec.map((command, n) =>
+    frames.setAside[n] === 0 && Number.isFinite(frames.errorArcsec[n]) ? command : 0,
+  );
+  const limit = correctionLimit(answered);
   let count = 0;
   let [squares, products, answers] = [0, 0, 0];
-  commandArcsec.forEach((command, n) => {
+  answered.forEach((command, n) => {
+    if (command === 0 || command >= limit.highest || command <= limit.lowest) return;
     const error = frames.errorArcsec[n] ?? NaN;
-    if (frames.setAside[n] !== 0 || command === 0 || !Number.isFinite(error)) return;
-    if (command >= limit.highest || command <= limit.lowest) return;
     count++;
     squares += error * error;
     products -= error * command;
