@@ -13,6 +13,7 @@ import type { Configuration } from './configuration';
 import type { NotifyHub } from './database/notify-hub';
 import { apiRoutes } from './http/api-routes';
 import { notFound } from './http/app-error';
+import { bearerTokens, unlessBearer } from './http/bearer';
 import { errorHandler } from './http/error-handler';
 import { EventStreams } from './http/event-streams';
 import { healthRoutes } from './http/health-routes';
@@ -36,6 +37,8 @@ import { rigRoutes } from './rigs/rig-routes';
 import { RigService } from './rigs/rig-service';
 import { setupRoutes } from './setups/setup-routes';
 import { SetupService } from './setups/setup-service';
+import { accessTokenRoutes } from './tokens/access-token-routes';
+import { AccessTokenService } from './tokens/access-token-service';
 
 export interface AppParts {
   readonly configuration: Configuration;
@@ -61,6 +64,8 @@ interface ResourceParts {
   readonly parts: AppParts;
   readonly authenticator: Authenticator;
   readonly streams: EventStreams;
+  readonly limits: Limits;
+  readonly tokens: AccessTokenService;
 }
 
 /** The web application from its parts: the one place that builds services. */
@@ -82,16 +87,21 @@ export function buildApp(parts: AppParts): App {
   app.use(healthRoutes(() => answers(parts.knex)));
 
   const api = '/api/v1';
-  app.use(api, sameOriginOnly(configuration.PUBLIC_URL)); // before any body is read
+  const limits = new Limits(parts.pool, parts.allowances);
+  const tokens = new AccessTokenService(parts.knex);
+  // Who asks and from where, before any body is read.
+  app.use(api, bearerTokens({ signIn: (token) => tokens.signIn(token), limits }));
+  app.use(api, unlessBearer(sameOriginOnly(configuration.PUBLIC_URL)));
   app.use(api, (_req, res, next) => {
     res.set('Cache-Control', 'private, no-cache'); // what a person sees is nobody else's
     next();
   });
   app.use(apiRoutes(operations, isHttps));
   const authenticator = makeAuthenticator(store);
-  app.use(api, sessionHandlers(store, authenticator, configuration.SESSION_SECRET));
+  const session = sessionHandlers(store, authenticator, configuration.SESSION_SECRET);
+  app.use(api, ...session.map(unlessBearer));
   app.use(api, express.json({ limit: '256kb' }));
-  app.use(resourceRoutes({ parts, authenticator, streams }));
+  app.use(resourceRoutes({ parts, authenticator, streams, limits, tokens }));
   app.use('/api', () => {
     throw notFound('address');
   });
@@ -119,9 +129,9 @@ function answers(knex: Knex): Promise<boolean> {
 }
 
 /** Each resource with its service. The paths are those of the contract, whole. */
-function resourceRoutes({ parts, authenticator, streams }: ResourceParts): Router {
+function resourceRoutes(resources: ResourceParts): Router {
+  const { parts, authenticator, streams, limits, tokens } = resources;
   const { knex, configuration } = parts;
-  const limits = new Limits(parts.pool, parts.allowances);
   const accounts = new AccountService(knex, new Passwords(parts.passwordRounds));
   const imports = new ImportService(knex);
   const uploads = new UploadService(knex, configuration.UPLOAD_LIMIT_MIB);
@@ -130,6 +140,7 @@ function resourceRoutes({ parts, authenticator, streams }: ResourceParts): Route
   return Router().use(
     accountRoutes({ accounts, limits, mailsShownAt }),
     sessionRoutes({ accounts, authenticator, limits }),
+    accessTokenRoutes(tokens),
     rigRoutes(new RigService(knex)),
     setupRoutes(new SetupService(knex)),
     columnMapRoutes(new ColumnMapService(knex)),

@@ -6,10 +6,12 @@ import { importApi } from './imports/import-api';
 import { nightApi } from './nights/night-api';
 import { rigApi } from './rigs/rig-api';
 import { setupApi } from './setups/setup-api';
+import { accessTokenApi } from './tokens/access-token-api';
 
 /** Every route of the application, as its resource describes it. */
 export const operations: readonly Operation[] = [
   ...accountApi,
+  ...accessTokenApi,
   ...rigApi,
   ...setupApi,
   ...columnMapApi,

@@ -11,7 +11,7 @@ import { SignUpModel } from './sign-up-model';
 export function writeAccountMail(
   knex: Knex,
   publicUrl: string,
-  job: MailJob,
+  job: Exclude<MailJob, { kind: 'import-ended' }>,
 ): Promise<Letter | null> {
   return job.kind === 'sign-up'
     ? writeSignUpMail(knex, publicUrl, job.signUpId)

@@ -20,6 +20,8 @@ export const STANDARD_ALLOWANCES = {
   mailByAddress: { tries: 20, seconds: HOUR_SECONDS },
   tokenByAddress: { tries: 30, seconds: QUARTER_HOUR_SECONDS },
   uploadByAccount: { tries: 600, seconds: HOUR_SECONDS },
+  wrongTokenByAddress: { tries: 30, seconds: QUARTER_HOUR_SECONDS },
+  requestByToken: { tries: 2000, seconds: QUARTER_HOUR_SECONDS },
 } as const satisfies Record<string, Allowance>;
 
 export type LimitName = keyof typeof STANDARD_ALLOWANCES;

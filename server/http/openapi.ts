@@ -13,6 +13,10 @@ export type OpenApiDocument = ReturnType<OpenApiGeneratorV31['generateDocument']
 
 export const PROBLEM_TYPE = 'application/problem+json';
 const JSON_TYPE = 'application/json';
+const TOKENS = {
+  readToken: 'A token of the account with the scope `read`',
+  uploadToken: 'A token of the account with the scope `upload`',
+};
 
 /** The OpenAPI 3.1 document of these operations. */
 export function buildOpenApi(operations: readonly Operation[]): OpenApiDocument {
@@ -22,6 +26,13 @@ export function buildOpenApi(operations: readonly Operation[]): OpenApiDocument 
     in: 'cookie',
     name: SESSION_COOKIE,
   });
+  for (const [name, description] of Object.entries(TOKENS)) {
+    registry.registerComponent('securitySchemes', name, {
+      type: 'http',
+      scheme: 'bearer',
+      description,
+    });
+  }
   for (const operation of operations) registry.registerPath(toRoute(operation));
   return new OpenApiGeneratorV31(registry.definitions).generateDocument({
     openapi: '3.1.0',
@@ -44,7 +55,7 @@ function toRoute(operation: Operation): RouteConfig {
     path,
     summary,
     tags: [tag],
-    security: operation.signedIn ? [{ session: [] }] : [],
+    security: operation.signedIn ? signIns(operation) : [],
     request: {
       ...(params && { params }),
       ...(query && { query }),
@@ -53,6 +64,15 @@ function toRoute(operation: Operation): RouteConfig {
     },
     responses: Object.fromEntries([...answers, ...problems]),
   };
+}
+
+/** Any one of them is enough. */
+function signIns({ method, byUploadToken }: Operation): Record<string, string[]>[] {
+  return [
+    { session: [] },
+    ...(method === 'get' ? [{ readToken: [] }] : []),
+    ...(byUploadToken ? [{ uploadToken: [] }] : []),
+  ];
 }
 
 function toResponse({ description, schema, contentType }: Answer): ResponseConfig {

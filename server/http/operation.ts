@@ -16,6 +16,8 @@ export interface Operation {
   readonly tag: string;
   readonly summary: string;
   readonly signedIn: boolean;
+  /** Whether a token for uploads is enough; what is read may be read with a token for reading. */
+  readonly byUploadToken?: boolean;
   readonly params?: z.ZodObject;
   readonly query?: z.ZodObject;
   readonly headers?: z.ZodObject;

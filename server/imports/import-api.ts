@@ -34,6 +34,7 @@ export const importApi: readonly Operation[] = [
     ...ofRig,
     method: 'post',
     path: importPaths.all('{rigId}'),
+    byUploadToken: true,
     summary: 'Send a guide log',
     body: { schema: uploadSchema, contentType: 'multipart/form-data' },
     answers: {
@@ -56,6 +57,7 @@ export const importApi: readonly Operation[] = [
     ...ofImport,
     method: 'get',
     path: one,
+    byUploadToken: true,
     summary: 'One import',
     answers: { 200: { description: 'The import', schema: logImportSchema } },
     problems: [400, 401, 404],

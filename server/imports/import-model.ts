@@ -1,4 +1,9 @@
-import { type AnalysisDocument, type ColumnMap, type IMPORT_STATES } from '@stillpier/contract';
+import {
+  type AnalysisDocument,
+  type ColumnMap,
+  type IMPORT_STATES,
+  type TOKEN_MAILS,
+} from '@stillpier/contract';
 import { type QueryBuilder } from 'objection';
 import { BaseModel } from '../database/base-model';
 
@@ -9,6 +14,9 @@ export class ImportModel extends BaseModel {
   declare rigId: string;
   declare setupId: string | null;
   declare uploadedBy: string | null;
+  /** Who is written to when it is read, and when: a log that a person sends is watched and tells nobody. */
+  declare mailTo: string | null;
+  declare mails: (typeof TOKEN_MAILS)[number] | null;
   declare fileName: string;
   declare sizeBytes: number;
   declare sha256: string;

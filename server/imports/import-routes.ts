@@ -10,6 +10,7 @@ import {
 } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
+import { bearerOf } from '../http/bearer';
 import type { Limits } from '../http/limits';
 import { readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
@@ -42,7 +43,8 @@ export function importRoutes({ imports, uploads, events, limits }: ImportParts):
     const account = requireAccount(req);
     const { rigId } = readRequest(rigParametersSchema, req.params);
     await limits.take('uploadByAccount', account.id);
-    const received = await uploads.receive(account.id, rigId, req, res);
+    const sender = { accountId: account.id, mails: bearerOf(req)?.mails ?? null };
+    const received = await uploads.receive(sender, rigId, req, res);
     res.status(received.duplicate ? 200 : 202).location(importPaths.one(rigId, received.id));
     res.json(logImportSchema.parse(received));
   });

@@ -86,7 +86,8 @@ export class ImportService {
         throw conflict('being-read', 'This file is being read already.');
       }
       const { setupId = row.setupId, map = row.map } = changes;
-      await startReading(trx, row, { setupId: await chooseSetup(trx, rigId, setupId), map });
+      const chosen = await chooseSetup(trx, rigId, setupId);
+      await startReading(trx, row, { setupId: chosen, map, mail: null });
     });
     return this.one(accountId, rigId, importId);
   }

@@ -1,4 +1,4 @@
-import type { ColumnMap } from '@stillpier/contract';
+import type { ColumnMap, TOKEN_MAILS } from '@stillpier/contract';
 import type { Knex } from 'knex';
 import { badInput } from '../http/app-error';
 import { SetupModel } from '../setups/setup-model';
@@ -17,6 +17,19 @@ export const WAITING = {
   attempt: 0,
 } as const;
 
+/** Who is written to when a log that came by a token is read. */
+export interface EndMail {
+  readonly to: string;
+  readonly when: (typeof TOKEN_MAILS)[number];
+}
+
+export interface ReadingChoice {
+  readonly setupId: string | null;
+  readonly map: ColumnMap | null;
+  /** null: nobody, since who asked for it watches. */
+  readonly mail: EndMail | null;
+}
+
 /**
  * Puts an import into the queue, in the transaction of the caller: the job exists if and only if the import stands. A
  * job of an earlier start that still runs may write no more, since the import names the new one.
@@ -24,7 +37,7 @@ export const WAITING = {
 export async function startReading(
   trx: Knex.Transaction,
   { id, rigId }: Pick<ImportModel, 'id' | 'rigId'>,
-  { setupId, map }: { readonly setupId: string | null; readonly map: ColumnMap | null },
+  { setupId, map, mail }: ReadingChoice,
 ): Promise<void> {
   const jobs = await trx.raw<{ rows: { id: number }[] }>(
     'SELECT id FROM graphile_worker.add_job(?, ?::json, max_attempts => ?)',
@@ -34,7 +47,14 @@ export async function startReading(
   if (jobId === undefined) throw new Error('The queue answered no job');
   await ImportModel.query(trx)
     .findById(id)
-    .patch({ ...WAITING, setupId, map, jobId });
+    .patch({
+      ...WAITING,
+      setupId,
+      map,
+      jobId,
+      mailTo: mail?.to ?? null,
+      mails: mail?.when ?? null,
+    });
   await announceImport(trx, { rigId, importId: id });
 }
 

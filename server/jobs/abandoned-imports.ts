@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { mailImportEnd } from '../imports/import-mails';
 import { ImportModel } from '../imports/import-model';
 import { announceImport } from '../imports/import-notices';
 
@@ -10,15 +11,20 @@ const SENTENCE =
  * it. That happens when every try ended by the worker's own death, which then could not say so itself.
  */
 export async function failAbandonedImports(knex: Knex): Promise<void> {
-  const abandoned = await ImportModel.query(knex)
-    .whereIn('state', ['waiting', 'running'])
-    .whereNotExists(
-      knex('graphile_worker.jobs')
-        .whereRaw('jobs.id = imports.job_id')
-        .whereRaw('(jobs.locked_at IS NOT NULL OR jobs.attempts < jobs.max_attempts)')
-        .select(knex.raw('1')),
-    )
-    .patch({ state: 'failed', stage: 'Failed', error: SENTENCE })
-    .returning('*');
-  for (const { id, rigId } of abandoned) await announceImport(knex, { rigId, importId: id });
+  await knex.transaction(async (trx) => {
+    const abandoned = await ImportModel.query(trx)
+      .whereIn('state', ['waiting', 'running'])
+      .whereNotExists(
+        trx('graphile_worker.jobs')
+          .whereRaw('jobs.id = imports.job_id')
+          .whereRaw('(jobs.locked_at IS NOT NULL OR jobs.attempts < jobs.max_attempts)')
+          .select(trx.raw('1')),
+      )
+      .patch({ state: 'failed', stage: 'Failed', error: SENTENCE })
+      .returning('*');
+    for (const row of abandoned) {
+      await announceImport(trx, { rigId: row.rigId, importId: row.id });
+      await mailImportEnd(trx, row, 'failed');
+    }
+  });
 }

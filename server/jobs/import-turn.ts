@@ -1,11 +1,14 @@
 import type { Job } from 'graphile-worker';
 import type { Knex } from 'knex';
 import type { PartialModelObject } from 'objection';
+import { mailImportEnd } from '../imports/import-mails';
 import { ImportModel } from '../imports/import-model';
 import { announceImport } from '../imports/import-notices';
 import { MOST_TRIES } from '../imports/start-reading';
 
 const MS_BETWEEN_REPORTS = 200;
+
+type ImportEnd = PartialModelObject<ImportModel> & { readonly state: 'done' | 'failed' };
 
 /** Another worker has taken the import over, or it was removed or started anew: this run has no more say. */
 export class TakenOverError extends Error {}
@@ -61,7 +64,15 @@ export class ImportTurn {
   }
 
   async fail(sentence: string): Promise<void> {
-    await this.write(this.knex, { state: 'failed', stage: 'Failed', error: sentence });
+    await this.knex.transaction(async (trx) => {
+      await this.end(trx, { state: 'failed', stage: 'Failed', error: sentence });
+    });
+  }
+
+  /** The last write: whoever is to be told that the import ended is told once, if and only if this stands. */
+  async end(trx: Knex.Transaction, changes: ImportEnd): Promise<void> {
+    await this.write(trx, changes);
+    await mailImportEnd(trx, this.row, changes.state);
   }
 
   async waitAgain(stage: string): Promise<void> {

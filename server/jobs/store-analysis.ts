@@ -33,7 +33,7 @@ export async function storeAnalysis(
   await knex.transaction(async (trx) => {
     const rig = await holdRig(trx, rigId);
     if (!rig) throw new TakenOverError(`rig ${rigId} is gone`);
-    await turn.write(trx, {
+    await turn.end(trx, {
       ...{ state: 'done', stage: 'Done', progress: 1, error: null },
       ...{ document, analysisVersion: ANALYSIS_VERSION },
       lineCount: document.reading.lines,

@@ -12,6 +12,7 @@ const MAX_ATTEMPTS = 14;
 export const mailJobSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('sign-up'), signUpId: z.uuid() }),
   z.strictObject({ kind: z.literal('password-reset'), email: z.string() }),
+  z.strictObject({ kind: z.literal('import-ended'), importId: z.uuid(), accountId: z.uuid() }),
 ]);
 export type MailJob = z.infer<typeof mailJobSchema>;
 

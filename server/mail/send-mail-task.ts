@@ -1,8 +1,9 @@
 import type { Task } from 'graphile-worker';
 import type { Knex } from 'knex';
 import { writeAccountMail } from '../accounts/account-mails';
-import { type LaidOutMail, layOutMail } from './mail-layout';
-import { mailJobSchema } from './mail-queue';
+import { writeImportMail } from '../imports/import-mails';
+import { type LaidOutMail, layOutMail, type Letter } from './mail-layout';
+import { type MailJob, mailJobSchema } from './mail-queue';
 
 export interface OutgoingMail extends LaidOutMail {
   readonly from: string;
@@ -21,10 +22,16 @@ export interface MailParts {
 /** The `send-mail` task of the queue. A mail server that is away makes the queue try again. */
 export function sendMailTask({ knex, transport, publicUrl, sender }: MailParts): Task {
   return async (payload) => {
-    const letter = await writeAccountMail(knex, publicUrl, mailJobSchema.parse(payload));
+    const letter = await writeLetter(knex, publicUrl, mailJobSchema.parse(payload));
     if (!letter) return;
     await transport.sendMail({ from: sender, to: letter.to, ...layOutMail(letter) });
   };
+}
+
+function writeLetter(knex: Knex, publicUrl: string, job: MailJob): Promise<Letter | null> {
+  return job.kind === 'import-ended'
+    ? writeImportMail(knex, publicUrl, job)
+    : writeAccountMail(knex, publicUrl, job);
 }
 
 /** The sender that stands in the environment, or one that is made from the public address. */

@@ -1,9 +1,11 @@
 import type { Readable } from 'node:stream';
 import {
+  accessTokenPaths,
   accountPaths,
   columnMapPaths,
   importPaths,
   logImportSchema,
+  newAccessTokenSchema,
   nightPaths,
   nightSchema,
   rigPaths,
@@ -36,9 +38,11 @@ const get = (path: () => string, expected: Record<Part, number>): Rule => ({
   send: (agent) => agent.get(path()),
 });
 
+const TOKEN = { name: 'Dome', scope: 'read', expiresAt: '2126-01-01T00:00:00Z' };
+
 let app: TestApp;
 let cast: Cast;
-let ids: { setup: string; map: string; import: string; run: string; date: string };
+let ids: Record<'setup' | 'map' | 'import' | 'run' | 'date' | 'token', string>;
 
 beforeAll(async () => {
   app = await makeApp();
@@ -49,7 +53,10 @@ beforeAll(async () => {
   const [date = ''] = (await finished(cast.owner, cast.rigId, log)).nights;
   const night = await cast.owner.get(nightPaths.one(cast.rigId, date)).expect(200);
   const run = nightSchema.parse(night.body).runs[0]?.id ?? '';
-  ids = { setup, map: await newMap(), import: log, run, date };
+  const token = newAccessTokenSchema.parse(
+    (await cast.owner.post(accessTokenPaths.all).send(TOKEN).expect(201)).body,
+  ).id;
+  ids = { setup, map: await newMap(), import: log, run, date, token };
   await worker.stop();
 });
 afterAll(() => app.close());
@@ -90,6 +97,19 @@ const RULES: Record<string, Rule> = {
   'put /api/v1/account/password': {
     expected: signedIn(400), // their own, and only with the current one
     send: (agent) => agent.put(accountPaths.password).send({}),
+  },
+  'get /api/v1/account/tokens': get(() => accessTokenPaths.all, signedIn(200)),
+  'post /api/v1/account/tokens': {
+    expected: signedIn(201),
+    send: (agent) => agent.post(accessTokenPaths.all).send(TOKEN),
+  },
+  'patch /api/v1/account/tokens/{tokenId}': {
+    expected: { ...signedIn(404), owner: 200 },
+    send: (agent) => agent.patch(accessTokenPaths.one(ids.token)).send({ name: 'Dome' }),
+  },
+  'delete /api/v1/account/tokens/{tokenId}': {
+    expected: { ...signedIn(404), owner: 204 },
+    send: (agent) => agent.delete(accessTokenPaths.one(ids.token)),
   },
   'post /api/v1/password-resets': elsewhere,
   'put /api/v1/password-resets': elsewhere,

@@ -3,27 +3,26 @@ import { setTimeout as sleep } from 'node:timers/promises';
 import { importPaths, type LogImport, logImportSchema } from '@stillpier/contract';
 import { makeKnex } from '../../server/database/connection';
 import { startWorker } from '../../server/jobs/start-worker';
-import { taskList } from '../../server/jobs/task-list';
-import { type Agent, PUBLIC_URL, type TestApp } from './api-app';
+import { READ_LOG_TASK } from '../../server/imports/start-reading';
+import { readLogTask } from '../../server/jobs/read-log-task';
+import { type Agent, type TestApp } from './api-app';
 
 export interface TestWorker {
   readonly logged: string[];
   stop(): Promise<void>;
 }
 
-/** The real worker within the process of the spec; what it logs is kept. */
+/** The real worker within the process of the spec; what it logs is kept. Mails are left to `TestApp.mailsTo`. */
 export async function startTestWorker(app: TestApp): Promise<TestWorker> {
   const logged: string[] = [];
   const log = (message: string, error?: unknown): void => {
     logged.push(error === undefined ? message : `${message}: ${inspect(error)}`);
   };
   const knex = makeKnex(app.databaseUrl, 4);
-  const transport = { sendMail: () => Promise.reject(new Error('this worker sends no mail')) };
-  const mail = { knex, transport, publicUrl: PUBLIC_URL, sender: 'nobody@stillpier.test' };
   const worker = await startWorker({
     databaseUrl: app.databaseUrl,
     knex,
-    tasks: taskList({ mail, log }),
+    tasks: { [READ_LOG_TASK]: readLogTask(knex, log) },
     sweepMs: 200,
     graceMs: 1,
     log,

@@ -50,3 +50,9 @@ export const importPaths = {
   document: (rigId: string, importId: string) =>
     `/api/v1/rigs/${rigId}/imports/${importId}/document`,
 } as const;
+
+/** Pages of the client that e-mails lead to. */
+export const importPages = {
+  all: (rigId: string) => `/rigs/${rigId}/import`,
+  night: (rigId: string, date: string) => `/rigs/${rigId}/nights/${date}`,
+} as const;

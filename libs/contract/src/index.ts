@@ -1,3 +1,4 @@
+export * from './access-token';
 export * from './account';
 export * from './analysis-document';
 export * from './column-map';
