@@ -49,7 +49,7 @@ describe('the response that is used', () => {
   });
 
   it("stays the rig's where correlated seeing would make the log read so low", () => {
-    // 0.2 of gain at 100 ms per arcsec is 0.002 ″/ms.
+    // 0.15 of gain at 100 ms per arcsec is 0.0015 ″/ms.
     expect(chooseResponse(0.0075, estimate(0.006, 0.0002), ANSWER)?.from).toBe('rig');
   });
 

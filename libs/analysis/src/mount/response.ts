@@ -22,7 +22,7 @@ export interface EstimatedResponse {
 const LARGEST_RELATIVE_ERROR = 0.2;
 const CONTRADICTION = 3;
 /** Of neighbouring frames' seeing: what a log may hold without showing it. */
-const SEEING_CORRELATION = 0.2;
+const SEEING_CORRELATION = 0.15;
 const FEWEST_A_DIRECTION = 20;
 
 /**
@@ -106,7 +106,7 @@ export function expectedPerUnit(
  * The response that the uncorrected motion rests on: the rig's, unless the log contradicts it by more than three
  * standard errors; else the log's; else null. Seeing that is correlated from frame to frame, and gusts, make the log's
  * response read low: in the loop's own terms a correlation ρ passes for a gain lower by ρ. A reading below the rig's
- * contradicts it only by what ρ = 0.2 cannot explain. A difference between the directions that the log shows beyond three
+ * contradicts it only by what ρ = 0.15 cannot explain. A difference between the directions that the log shows beyond three
  * standard errors is kept either way: it would add up to a drift.
  *
  * @param gainPerUnit Part of an error that a guider answers, in units of correction per arcsec; null where not known.
