@@ -28,6 +28,7 @@ export function arcminText(arcmin: number): string {
 export function smallText(value: number | null): string {
   if (value === null) return NO_VALUE;
   const size = Math.abs(value);
+  if (size > 0 && size < 0.00005) return '<0.0001';
   const digits = size === 0 ? 2 : Math.max(0, 1 - Math.floor(Math.log10(size)));
   return size >= 9.95 ? ratioText(value) : fixed(value, Math.min(4, digits));
 }

@@ -28,8 +28,14 @@ export class StarPlate {
   protected readonly pxArcsec = computed(() => this.chosen().of.optics.imagingScaleArcsecPerPx);
   protected readonly width = computed(() => arcsecText(2 * this.halfWidthArcsec()));
 
-  protected readonly facts = computed(() => {
+  /** The star and the seeing that it was predicted with. */
+  protected readonly shape = computed(() => {
     const star = this.run().footprint;
+    const seeingFwhmArcsec = this.seeing();
+    return star && seeingFwhmArcsec !== null ? { star, seeingFwhmArcsec } : null;
+  });
+  protected readonly facts = computed(() => {
+    const star = this.shape()?.star;
     if (!star) return null;
     const { fwhmMajorArcsec: major, fwhmMinorArcsec: minor } = star;
     const scale = this.pxArcsec();

@@ -78,6 +78,22 @@ describe('TraceChart', () => {
     );
   });
 
+  it('moves within what is in sight after a zoom', async () => {
+    const { fixture, page, button } = await renderTrace(false);
+    for (let i = 0; i < 3; i += 1) button('Closer').click();
+    await fixture.whenStable();
+    const slider = page.querySelector('[role=slider]')!;
+    const timeAfter = async (key: string) => {
+      slider.dispatchEvent(new KeyboardEvent('keydown', { key }));
+      await fixture.whenStable();
+      return slider.getAttribute('aria-valuetext')?.slice(0, 8);
+    };
+    // In sight: 150 s around the middle of 1200 s, from 525 to 675 s, a frame each 2 s.
+    expect(await timeAfter('ArrowRight')).toBe('20:08:46');
+    expect(await timeAfter('ArrowRight')).toBe('20:08:48');
+    expect(await timeAfter('End')).toBe('20:11:14');
+  });
+
   it('asks for a finer stretch when it is zoomed into thinned frames', async () => {
     const { fixture, button, wanted } = await renderTrace(true);
     button('Closer').click();

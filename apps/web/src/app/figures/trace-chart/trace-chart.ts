@@ -19,7 +19,12 @@ import { ReadingLine } from '../reading-line/reading-line';
 import { TokenColours } from '../token-colours';
 import { traceColumns } from './trace-columns';
 import { BOTTOM_PX, HEIGHT_PX, LEFT_PX, RIGHT_PX, traceContent, traceFrame } from './trace-options';
-import { nearestIndex, type SecondsRange, type TraceStretch } from './trace-stretch';
+import {
+  firstAtOrAfter,
+  nearestIndex,
+  type SecondsRange,
+  type TraceStretch,
+} from './trace-stretch';
 
 const NARROWEST_PX = 700;
 const ASK_AFTER_MS = 200;
@@ -232,8 +237,8 @@ export class TraceChart {
     const times = this.shown().timeSeconds;
     const { fromSeconds, toSeconds } = this.sight();
     const now = this.readingInSight();
-    const first = nearestIndex(times, fromSeconds);
-    const last = nearestIndex(times, toSeconds);
+    const first = firstAtOrAfter(times, fromSeconds);
+    const last = firstAtOrAfter(times, toSeconds + 1e-6) - 1;
     const index = now === null ? first : nearestIndex(times, now) + step;
     this.readingSeconds.set(times[Math.min(last, Math.max(first, index))] ?? null);
   }

@@ -62,6 +62,12 @@ describe('traceColumns', () => {
     ]);
   });
 
+  it('never takes thinned steps for single frames', () => {
+    const thinned = { ...stretchOf(Array.from({ length: 80 }, () => 1)), thinned: true };
+    const { stepSeconds } = traceColumns(thinned, { fromSeconds: 10, toSeconds: 20 }, 400);
+    expect(stepSeconds).toBeGreaterThan(0);
+  });
+
   it('draws nothing of an empty stretch', () => {
     expect(traceColumns(stretchOf([]), { fromSeconds: 0, toSeconds: 10 }, 100)).toEqual({
       stepSeconds: 0,

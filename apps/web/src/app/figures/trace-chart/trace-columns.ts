@@ -39,8 +39,9 @@ export function traceColumns(
     firstAtOrAfter(stretch.timeSeconds, sight.toSeconds) + 1,
   );
   const count = last - first;
-  const single = count * PX_PER_SINGLE_FRAME <= widthPx;
-  const columns = Math.max(1, Math.min(widthPx, Math.floor(count / FRAMES_PER_COLUMN)));
+  const single = !stretch.thinned && count * PX_PER_SINGLE_FRAME <= widthPx;
+  const perColumn = stretch.thinned ? 1 : FRAMES_PER_COLUMN; // a thinned step holds several already
+  const columns = Math.max(1, Math.min(widthPx, Math.floor(count / perColumn)));
   const stepSeconds = single ? 0 : (sight.toSeconds - sight.fromSeconds) / columns;
   const gather = (axis: AxisExtent): TraceSegment[] =>
     single

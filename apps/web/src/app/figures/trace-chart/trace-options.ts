@@ -53,7 +53,7 @@ export function traceFrame({ colours, durationSeconds, halfRangeArcsec }: TraceF
       gridIndex,
       min: 0,
       max: durationSeconds,
-      axisLine: { show: false },
+      axisLine: { show: false, onZero: false },
       axisTick: { show: axis === 'dec', lineStyle: { color: colours.ruleStrong } },
       axisLabel: { ...label, show: axis === 'dec', color: colours.ink2, margin: 8 },
       splitLine: { show: false },
