@@ -1,6 +1,7 @@
 import { type PolarAlignment } from '../analysis-document';
 import {
   LARGEST_POLAR_DRIFT_PER_ARCMIN,
+  RADIANS_PER_ARCMIN,
   RADIANS_PER_DEGREE,
   RADIANS_PER_HOUR,
 } from '../sky/earth-rotation';
@@ -130,7 +131,9 @@ function solve(
   }
   const { azimuth, altitude, covariance } = leastSquaresParts(equations);
   const total = Math.hypot(azimuth, altitude);
-  const standardError = errorOfLength(azimuth, altitude, covariance);
+  // First order in the misalignment is wrong by the misalignment itself, as a part of it (REFERENCE 4).
+  const firstOrder = total * total * RADIANS_PER_ARCMIN;
+  const standardError = Math.hypot(errorOfLength(azimuth, altitude, covariance), firstOrder);
   if (standardError > Math.max(LARGEST_ERROR_ARCMIN, LARGEST_ERROR_PART * total)) {
     return {
       why: `The drifts of these runs tell the polar error only within ${standardError.toFixed(1)} arcmin.`,
