@@ -9,6 +9,8 @@ import { Passwords } from './accounts/passwords';
 import { sessionRoutes } from './accounts/session-routes';
 import { columnMapRoutes } from './column-maps/column-map-routes';
 import { ColumnMapService } from './column-maps/column-map-service';
+import { byHandRoutes } from './by-hand/by-hand-routes';
+import { ByHandService } from './by-hand/by-hand-service';
 import type { Configuration } from './configuration';
 import type { NotifyHub } from './database/notify-hub';
 import { apiRoutes } from './http/api-routes';
@@ -150,5 +152,6 @@ function resourceRoutes(resources: ResourceParts): Router {
       rigStates: new RigStateService(knex),
       runSeries: new RunSeriesService(knex),
     }),
+    byHandRoutes(new ByHandService(knex)),
   );
 }

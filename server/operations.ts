@@ -1,4 +1,5 @@
 import { accountApi } from './accounts/account-api';
+import { byHandApi } from './by-hand/by-hand-api';
 import { columnMapApi } from './column-maps/column-map-api';
 import { serviceApi } from './http/api-routes';
 import type { Operation } from './http/operation';
@@ -17,5 +18,6 @@ export const operations: readonly Operation[] = [
   ...columnMapApi,
   ...importApi,
   ...nightApi,
+  ...byHandApi,
   ...serviceApi,
 ];

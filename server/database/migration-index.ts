@@ -4,6 +4,7 @@ import * as rigs from '../../migrations/20260901100000-create-rigs';
 import * as imports from '../../migrations/20260901110000-create-imports';
 import * as nights from '../../migrations/20260901120000-create-nights';
 import * as accessTokens from '../../migrations/20260902090000-create-access-tokens';
+import * as byHandEntries from '../../migrations/20260902100000-create-by-hand-entries';
 
 /**
  * Every migration by name. Static imports, since they work alike from TypeScript and from the
@@ -16,4 +17,5 @@ export const migrations: Record<string, Knex.Migration> = {
   '20260901110000-create-imports': imports,
   '20260901120000-create-nights': nights,
   '20260902090000-create-access-tokens': accessTokens,
+  '20260902100000-create-by-hand-entries': byHandEntries,
 };

@@ -3,11 +3,13 @@ import { GuideLogError } from '@stillpier/guide-log';
 import type { JobHelpers, Task } from 'graphile-worker';
 import type { Knex } from 'knex';
 import * as z from 'zod';
+import { byHandOfLog } from '../by-hand/by-hand-service';
 import { RigModel } from '../rigs/rig-model';
 import { SetupModel } from '../setups/setup-model';
 import { describeRig } from './describe-rig';
 import { ImportTurn, TakenOverError } from './import-turn';
 import { readOriginal } from './read-original';
+import { runOffsets, runsByHand } from './runs-by-hand';
 import { storeAnalysis } from './store-analysis';
 
 const payloadSchema = z.object({ importId: z.uuid() });
@@ -65,8 +67,12 @@ async function work(knex: Knex, turn: ImportTurn, { abortSignal }: JobHelpers): 
   if (frames.startEpochSeconds === null) throw new UnusableLogError(NO_DATE);
 
   await turn.report(READ_SHARE, 'Analysing the runs');
-  const analysis = analyseLogWithSeries(frames, reading, describeRig(rig, setup ?? null), {});
+  const offsetsSeconds = runOffsets(frames);
+  const byHand = runsByHand(offsetsSeconds, await byHandOfLog(knex, turn.row.id));
+  const description = describeRig(rig, setup ?? null);
+  const analysis = analyseLogWithSeries(frames, reading, description, { byHand });
   abortSignal.throwIfAborted();
   await turn.report(ANALYSED_SHARE, 'Keeping the results');
-  await storeAnalysis(knex, turn, { analysis, seeingFwhmArcsec: setup?.seeingFwhmArcsec ?? null });
+  const seeingFwhmArcsec = setup?.seeingFwhmArcsec ?? null;
+  await storeAnalysis(knex, turn, { analysis, offsetsSeconds, seeingFwhmArcsec });
 }

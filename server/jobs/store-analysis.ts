@@ -16,6 +16,8 @@ import { runIdOf } from './run-id';
 
 interface Analysed {
   readonly analysis: LogAnalysis;
+  /** Where each run begins, in seconds since the first frame of the log. */
+  readonly offsetsSeconds: readonly number[];
   readonly seeingFwhmArcsec: number | null;
 }
 
@@ -26,7 +28,7 @@ interface Analysed {
 export async function storeAnalysis(
   knex: Knex,
   turn: ImportTurn,
-  { analysis, seeingFwhmArcsec }: Analysed,
+  { analysis, offsetsSeconds, seeingFwhmArcsec }: Analysed,
 ): Promise<void> {
   const { id: importId, rigId, setupId } = turn.row;
   const { document } = analysis;
@@ -44,12 +46,16 @@ export async function storeAnalysis(
     const nights = new Set(earlier.map(({ night }) => night));
     for (const [at, analysedRun] of analysis.runs.entries()) {
       const run = document.runs[at];
-      if (!run) throw new Error('The analysis has series without a run');
+      const logOffsetSeconds = offsetsSeconds[at];
+      if (!run || logOffsetSeconds === undefined) {
+        throw new Error('The analysis has series without a run');
+      }
       const id = runIdOf(importId, run.index);
       const night = nightDateOf(startOf(run), rig.site.timeZone);
       nights.add(night);
       await RunModel.query(trx).insert({
         ...{ id, rigId, importId, setupId, night, seeingFwhmArcsec, run },
+        logOffsetSeconds,
         ...measuresOf(run),
         optics: document.optics,
         spectrum: spectrumOf(analysedRun),

@@ -13,6 +13,8 @@ export class RunModel extends BaseModel {
   declare runIndex: number;
   declare target: string | null;
   declare startsAt: Date;
+  /** Of the first frame, since the first frame of the log. */
+  declare logOffsetSeconds: number;
   declare durationSeconds: number;
   declare frames: number;
   declare used: number;

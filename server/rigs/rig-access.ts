@@ -3,11 +3,12 @@ import { forbidden, notFound } from '../http/app-error';
 import { RigModel, type RigRole } from './rig-model';
 
 /** What somebody wants to do on a rig; the table of rights is PRODUCT's. */
-export type RigRight = 'see' | 'upload' | 'edit' | 'own';
+export type RigRight = 'see' | 'upload' | 'setAside' | 'edit' | 'own';
 
 const ROLES_WITH: Record<RigRight, readonly RigRole[]> = {
   see: ['owner', 'operator', 'advisor'],
   upload: ['owner', 'operator'],
+  setAside: ['owner', 'operator'],
   edit: ['owner', 'operator'],
   own: ['owner'],
 };
@@ -15,6 +16,7 @@ const ROLES_WITH: Record<RigRight, readonly RigRole[]> = {
 const REFUSALS: Record<RigRight, string> = {
   see: '',
   upload: 'Only the owner and the operators of this rig may add or remove logs.',
+  setAside: 'Only the owner and the operators of this rig may set frames aside.',
   edit: 'Only the owner and the operators of this rig may change it.',
   own: 'Only the owner of this rig may do that.',
 };

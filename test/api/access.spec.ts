@@ -2,6 +2,7 @@ import type { Readable } from 'node:stream';
 import {
   accessTokenPaths,
   accountPaths,
+  byHandPaths,
   columnMapPaths,
   importPaths,
   logImportSchema,
@@ -212,6 +213,17 @@ const RULES: Record<string, Rule> = {
     () => nightPaths.spectrum(rig(), ids.run),
     see(200),
   ),
+  'get /api/v1/rigs/{rigId}/runs/{runId}/by-hand': get(
+    () => byHandPaths.of(rig(), ids.run),
+    see(200),
+  ),
+  'post /api/v1/rigs/{rigId}/runs/{runId}/by-hand': {
+    expected: edit(202),
+    send: (agent) =>
+      agent
+        .post(byHandPaths.of(rig(), ids.run))
+        .send({ action: 'set aside', fromSeconds: 0, toSeconds: 10, reason: 'Clouds' }),
+  },
   'delete /api/v1/rigs/{rigId}': {
     expected: own(204),
     send: (agent) => agent.delete(rigPaths.one(rig())),

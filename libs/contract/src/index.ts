@@ -1,6 +1,7 @@
 export * from './access-token';
 export * from './account';
 export * from './analysis-document';
+export * from './by-hand';
 export * from './column-map';
 export * from './import';
 export * from './night';
