@@ -61,7 +61,8 @@ function knownRate(
   { ra, cosDeclination, expected }: DecPlayInput,
   unit: 'ms' | 'arcsec',
 ): { readonly perUnit: number; readonly prior: number } | null {
-  const raContradicts = unit === 'ms' && ra?.from === 'log';
+  // without a declination RA reads lower than the rate by right
+  const raContradicts = unit === 'ms' && cosDeclination !== null && ra?.from === 'log';
   if (expected !== null && !raContradicts) return { perUnit: expected, prior: RIG_PRIOR };
   if (ra === null) return expected === null ? null : { perUnit: expected, prior: GUESS_PRIOR };
   const perUnit = (ra.positivePerUnit + ra.negativePerUnit) / 2 / (cosDeclination ?? 1);

@@ -15,6 +15,8 @@ import {
   describeResponse,
   estimateResponse,
   type EstimatedResponse,
+  expectedPerUnit,
+  rigResponse,
 } from './response';
 import { seeingFloor } from './seeing-floor';
 import { type SmoothMotion, smoothMotion } from './smooth-motion';
@@ -22,8 +24,8 @@ import { describeUncorrected, displacements, driftError, uncorrectedMotion } fro
 
 export interface AxisInput extends AxisFacts {
   readonly run: RunSeries;
-  /** What one unit of correction should do, arcsec on the sky; null where nothing tells. */
-  readonly expected: number | null;
+  /** Of the axis to the sky: cos(declination) in RA, 1 in Dec; null where the declination is not known. */
+  readonly skyPerAxisAngle: number | null;
   /** Dec only: the gap in the commands, in units of the correction; 0 for none. */
   readonly playWidth: number;
   /** RA only: look for a periodic error; the rig's worm period or null. */
@@ -48,18 +50,20 @@ const USUAL_GAIN = 0.6;
 
 /** All measures of one axis that rest on its corrections. O(n log n). */
 export function measureAxis(input: AxisInput): MeasuredAxis {
-  const { run, errorArcsec, correction, sign, expected } = input;
+  const { run, errorArcsec, correction, sign, guideRateSidereal, skyPerAxisAngle } = input;
+  const expected = expectedPerUnit(run.correctionUnit, guideRateSidereal, skyPerAxisAngle);
+  const byRig = rigResponse(run.correctionUnit, guideRateSidereal, skyPerAxisAngle);
   const moves = (correction ?? new Float64Array(run.count)).map(
     (given) => given * (sign?.sign ?? 1),
   );
   const moved = input.playWidth > 0 ? throughPlay(moves, input.playWidth) : moves;
   const answered = loopGain(loopFrames(input), moves, 0);
-  const guess = expected ?? (answered === null ? null : USUAL_GAIN / answered.gain);
+  const guess = byRig?.perUnit ?? (answered === null ? null : USUAL_GAIN / answered.gain);
   const estimated =
     sign !== null && guess !== null
       ? estimateResponse(input.frames, errorArcsec, moved, guess)
       : null;
-  const used = chooseResponse(expected, estimated, answered?.gain ?? null);
+  const used = chooseResponse(byRig, estimated, answered?.gain ?? null);
   const response = describeResponse(run.correctionUnit, expected, estimated, used);
   const still = correction?.every((given) => given === 0) ?? false;
   if (correction === null || (!still && (sign === null || used === null))) {

@@ -53,16 +53,15 @@ export function measureMountMotion(run: RunSeries, rig: RigDescription): MountMo
     errorArcsec: run.raErrorArcsec,
     correction: raCorrection,
     sign: signs.ra,
-    expected: expectedPerUnit(run.correctionUnit, guideRateSidereal, cosDeclination),
+    skyPerAxisAngle: cosDeclination,
     playWidth: 0,
     worm: { periodSeconds: rigWormPeriodSeconds(rig) },
   });
-  const decExpected = expectedPerUnit(run.correctionUnit, guideRateSidereal, 1);
   const decPlay = findDecPlay(run, decCorrection, {
     sign: signs.dec,
     ra: ra.motion.responseUsed,
     cosDeclination,
-    expected: decExpected,
+    expected: expectedPerUnit(run.correctionUnit, guideRateSidereal, 1),
   });
   const dec = measureAxis({
     run,
@@ -73,7 +72,7 @@ export function measureMountMotion(run: RunSeries, rig: RigDescription): MountMo
     errorArcsec: run.decErrorArcsec,
     correction: decCorrection,
     sign: signs.dec,
-    expected: decExpected,
+    skyPerAxisAngle: 1,
     playWidth: 'why' in decPlay.fit ? 0 : decPlay.fit.determined ? decPlay.widthUnits : 0,
     worm: null,
   });

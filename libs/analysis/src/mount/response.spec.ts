@@ -19,6 +19,7 @@ const estimate = (
   directionError: standardError,
   fit: {} as MotionFit, // not read here
 });
+const RIG = { perUnit: 0.0075, isUpperLimit: false };
 /** Guiders that answer 1 ″ with 100 ms. */
 const ANSWER = 100;
 
@@ -39,22 +40,28 @@ describe('the expected response', () => {
 
 describe('the response that is used', () => {
   it("is the rig's while the log does not contradict it", () => {
-    const used = chooseResponse(0.0075, estimate(0.0079, 0.0002), ANSWER);
+    const used = chooseResponse(RIG, estimate(0.0079, 0.0002), ANSWER);
     expect(used).toMatchObject({ positivePerUnit: 0.0075, negativePerUnit: 0.0075, from: 'rig' });
   });
 
   it("is the log's when it lies beyond three standard errors", () => {
-    expect(chooseResponse(0.0075, estimate(0.0085, 0.0002), ANSWER)?.from).toBe('log');
-    expect(chooseResponse(0.0075, estimate(0.0042, 0.0002), ANSWER)?.from).toBe('log');
+    expect(chooseResponse(RIG, estimate(0.0085, 0.0002), ANSWER)?.from).toBe('log');
+    expect(chooseResponse(RIG, estimate(0.0042, 0.0002), ANSWER)?.from).toBe('log');
   });
 
   it("stays the rig's where correlated seeing would make the log read so low", () => {
-    // 0.15 of gain at 100 ms per arcsec is 0.0015 ″/ms.
-    expect(chooseResponse(0.0075, estimate(0.006, 0.0002), ANSWER)?.from).toBe('rig');
+    // 0.1 of gain at 100 ms per arcsec is 0.001 ″/ms.
+    expect(chooseResponse(RIG, estimate(0.0062, 0.0002), ANSWER)?.from).toBe('rig');
+  });
+
+  it("is the log's where it reads below an upper limit, since the declination explains it", () => {
+    const limit = { ...RIG, isUpperLimit: true };
+    expect(chooseResponse(limit, estimate(0.006, 0.0002), ANSWER)?.from).toBe('log');
+    expect(chooseResponse(limit, estimate(0.0073, 0.0002), ANSWER)?.from).toBe('rig');
   });
 
   it('keeps a clear difference between the directions', () => {
-    const used = chooseResponse(0.0075, estimate(0.0076, 0.0002, 0.00038), ANSWER);
+    const used = chooseResponse(RIG, estimate(0.0076, 0.0002, 0.00038), ANSWER);
     expect(used!.positivePerUnit).toBeCloseTo(0.0075 * 1.05, 9);
     expect(used!.negativePerUnit).toBeCloseTo(0.0075 * 0.95, 9);
   });

@@ -18,11 +18,18 @@ export interface EstimatedResponse {
   readonly fit: MotionFit;
 }
 
+/** What one unit of correction does by the rig, arcsec on the sky. */
+export interface RigResponse {
+  readonly perUnit: number;
+  /** Whether it may do less: RA at an unknown declination, where `perUnit` is that of the celestial equator. */
+  readonly isUpperLimit: boolean;
+}
+
 /** A relative standard error beyond this tells nothing. */
 const LARGEST_RELATIVE_ERROR = 0.2;
 const CONTRADICTION = 3;
 /** Of neighbouring frames' seeing: what a log may hold without showing it. */
-const SEEING_CORRELATION = 0.15;
+const SEEING_CORRELATION = 0.1;
 const FEWEST_A_DIRECTION = 20;
 
 /**
@@ -102,24 +109,37 @@ export function expectedPerUnit(
   return (guideRateSidereal * SIDEREAL_RATE_ARCSEC_PER_SECOND * skyPerAxisAngle) / 1000;
 }
 
+/** The rig's response for choosing; at an unknown declination that of the celestial equator, as an upper limit. */
+export function rigResponse(
+  unit: 'ms' | 'arcsec',
+  guideRateSidereal: number | undefined,
+  skyPerAxisAngle: number | null,
+): RigResponse | null {
+  const perUnit = expectedPerUnit(unit, guideRateSidereal, skyPerAxisAngle ?? 1);
+  return perUnit === null
+    ? null
+    : { perUnit, isUpperLimit: unit === 'ms' && skyPerAxisAngle === null };
+}
+
 /**
  * The response that the uncorrected motion rests on: the rig's, unless the log contradicts it by more than three
  * standard errors; else the log's; else null. Seeing that is correlated from frame to frame, and gusts, make the log's
  * response read low: in the loop's own terms a correlation ρ passes for a gain lower by ρ. A reading below the rig's
- * contradicts it only by what ρ = 0.15 cannot explain. A difference between the directions that the log shows beyond three
- * standard errors is kept either way: it would add up to a drift.
+ * contradicts it only by what ρ = 0.1 cannot explain; one below an upper limit contradicts it as it stands, since the
+ * declination explains it as well. A difference between the directions that the log shows beyond three standard errors is
+ * kept either way: it would add up to a drift.
  *
  * @param gainPerUnit Part of an error that a guider answers, in units of correction per arcsec; null where not known.
  */
 export function chooseResponse(
-  expected: number | null,
+  rig: RigResponse | null,
   estimated: EstimatedResponse | null,
   gainPerUnit: number | null,
 ): UsedResponse | null {
-  const contradicted = expected !== null && contradicts(expected, estimated, gainPerUnit);
-  const perUnit = expected === null || contradicted ? estimated?.perUnit : expected;
+  const contradicted = rig !== null && contradicts(rig, estimated, gainPerUnit);
+  const perUnit = rig === null || contradicted ? estimated?.perUnit : rig.perUnit;
   if (perUnit === undefined) return null;
-  const from = perUnit === expected ? 'rig' : 'log';
+  const from = perUnit === rig?.perUnit ? 'rig' : 'log';
   const unequal =
     estimated !== null &&
     Math.abs(estimated.halfDifference) > CONTRADICTION * estimated.halfDifferenceError;
@@ -134,14 +154,15 @@ export function chooseResponse(
 }
 
 function contradicts(
-  expected: number,
+  rig: RigResponse,
   estimated: EstimatedResponse | null,
   gainPerUnit: number | null,
 ): boolean {
   if (estimated === null) return false;
   const allowed = CONTRADICTION * estimated.standardError;
-  const correlated = gainPerUnit === null ? 0 : SEEING_CORRELATION / gainPerUnit;
-  const excess = estimated.perUnit - expected;
+  const correlated =
+    gainPerUnit === null || rig.isUpperLimit ? 0 : SEEING_CORRELATION / gainPerUnit;
+  const excess = estimated.perUnit - rig.perUnit;
   return excess > allowed || excess < -allowed - correlated;
 }
 
