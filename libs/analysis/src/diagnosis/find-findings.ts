@@ -66,13 +66,16 @@ export function findFindings(run: MeasuredRun, context: FindingContext): Finding
 const rank = (draft: Draft) => GRAVEST_FIRST.indexOf(draft.severity);
 const cured = (draft: Draft) => draft.gain?.rmsIfCuredArcsec ?? Infinity;
 
-/** Nothing about the mount shouts when the sky dominates; nothing about it is told for sure by a short run. */
+/** Nothing about the mount shouts when the sky dominates; a short run tells nothing for sure but a lost star. */
 function heldBySky(draft: Draft, run: MeasuredRun, isShort: boolean): Draft {
+  if (isShort && draft.code !== 'star-lost') {
+    return { ...draft, severity: mildest(draft.severity, 'watch') };
+  }
   if (!draft.onMount) return draft;
   const { watch: ofAxis, act: ofBoth } = THRESHOLDS.floorShare;
   const own = draft.axis === null ? null : partOf(run, draft.axis, 'seeing floor');
   const dominates = (own?.share ?? 0) > ofAxis || (floorShare(run) ?? 0) > ofBoth;
-  return dominates || isShort ? { ...draft, severity: mildest(draft.severity, 'watch') } : draft;
+  return dominates ? { ...draft, severity: mildest(draft.severity, 'watch') } : draft;
 }
 
 function tooShort(run: MeasuredRun, { rig }: FindingContext): Draft[] {

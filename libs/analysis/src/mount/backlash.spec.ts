@@ -95,6 +95,12 @@ describe('what cannot be told', () => {
     expect('why' in fit ? fit.why : fit.determined).not.toBe(true);
   });
 
+  it('says so when the Dec error never changes', () => {
+    const input = nightInput(withGap(0), 1, 0.05);
+    const still = { ...input, errorArcsec: input.errorArcsec.map(() => 0.3) };
+    expect(fitBacklash(still)).toEqual({ why: expect.stringContaining('not follow') as string });
+  });
+
   it('counts reversals past frames without a correction (by hand)', () => {
     expect(reversalsOf(Float64Array.of(1, 0, -1, -2, 0, 0, 3, 3, -1))).toBe(3);
   });

@@ -74,7 +74,7 @@ export function fitBacklash(input: BacklashInput): PlayFit | { readonly why: str
   }
   const profile = scannedProfile(input);
   const best = profile.best();
-  if (best.response < CLEAR_RESPONSE * best.responseError) {
+  if (!(best.squares > 0) || !(best.response > CLEAR_RESPONSE * best.responseError)) {
     return { why: 'The star does not follow the Dec corrections clearly enough to tell a gap.' };
   }
   return described(input, profile, best, reversals);

@@ -1,4 +1,5 @@
 import { type RunSeries, SET_ASIDE_CODES } from '../series/run-series';
+import { linearTrend } from '../statistics/linear-trend';
 import { bumpsOf } from './bumps';
 import { guideAgain } from './guide-again';
 import { loopLaw, type LoopLaw } from './loop-law';
@@ -59,9 +60,8 @@ export function replayableAxis(
   axis: 'ra' | 'dec',
 ): ReplayableAxis | null {
   const { commandArcsec, displacementArcsec, uncorrectedArcsec, smoothArcsec } = motion[axis];
-  const uncorrected = motion.uncorrected?.[axis];
   if (commandArcsec === null || displacementArcsec === null) return null;
-  if (uncorrectedArcsec === null || smoothArcsec === null || uncorrected === undefined) return null;
+  if (uncorrectedArcsec === null || smoothArcsec === null) return null;
   const guided = commandArcsec.some((command) => command !== 0);
   const gain = guided ? motion.loop[axis]?.gain : 0;
   if (gain === null || gain === undefined) return null;
@@ -70,7 +70,10 @@ export function replayableAxis(
   const moved = summedBefore(displacementArcsec);
   const starArcsec = error.map((value, n) => value - (moved[n] ?? 0));
   const rest = uncorrectedArcsec.map((value, n) => value - (smoothArcsec[n] ?? NaN));
-  const driftPerSecond = uncorrected.driftArcsecPerMinute / 60;
+  // The document tells the drift only where both axes are known; a log may guide one alone.
+  const fitted = motion.uncorrected?.[axis].driftArcsecPerMinute;
+  const driftPerSecond =
+    fitted === undefined ? linearTrend(run.timeSeconds, smoothArcsec).slope : fitted / 60;
   const drift = run.timeSeconds.map((time) => driftPerSecond * time);
   const { decPlay } = motion;
   const gapKnown = axis === 'dec' && 'determined' in decPlay && decPlay.determined;
