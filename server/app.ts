@@ -13,6 +13,8 @@ import { byHandRoutes } from './by-hand/by-hand-routes';
 import { ByHandService } from './by-hand/by-hand-service';
 import type { Configuration } from './configuration';
 import type { NotifyHub } from './database/notify-hub';
+import { exportRoutes } from './exports/export-routes';
+import { ExportService } from './exports/export-service';
 import { apiRoutes } from './http/api-routes';
 import { notFound } from './http/app-error';
 import { bearerTokens, unlessBearer } from './http/bearer';
@@ -153,5 +155,6 @@ function resourceRoutes(resources: ResourceParts): Router {
       runSeries: new RunSeriesService(knex),
     }),
     byHandRoutes(new ByHandService(knex)),
+    exportRoutes(new ExportService(knex)),
   );
 }

@@ -1,6 +1,7 @@
 import { accountApi } from './accounts/account-api';
 import { byHandApi } from './by-hand/by-hand-api';
 import { columnMapApi } from './column-maps/column-map-api';
+import { exportApi } from './exports/export-api';
 import { serviceApi } from './http/api-routes';
 import type { Operation } from './http/operation';
 import { importApi } from './imports/import-api';
@@ -19,5 +20,6 @@ export const operations: readonly Operation[] = [
   ...importApi,
   ...nightApi,
   ...byHandApi,
+  ...exportApi,
   ...serviceApi,
 ];

@@ -74,5 +74,7 @@ async function work(knex: Knex, turn: ImportTurn, { abortSignal }: JobHelpers): 
   abortSignal.throwIfAborted();
   await turn.report(ANALYSED_SHARE, 'Keeping the results');
   const seeingFwhmArcsec = setup?.seeingFwhmArcsec ?? null;
-  await storeAnalysis(knex, turn, { analysis, offsetsSeconds, seeingFwhmArcsec });
+  const correctionUnit = frames.raCorrection || frames.decCorrection ? frames.correctionUnit : null;
+  const found = { analysis, offsetsSeconds, correctionUnit, seeingFwhmArcsec };
+  await storeAnalysis(knex, turn, found);
 }

@@ -18,6 +18,7 @@ interface Analysed {
   readonly analysis: LogAnalysis;
   /** Where each run begins, in seconds since the first frame of the log. */
   readonly offsetsSeconds: readonly number[];
+  readonly correctionUnit: 'ms' | 'arcsec' | null;
   readonly seeingFwhmArcsec: number | null;
 }
 
@@ -28,7 +29,7 @@ interface Analysed {
 export async function storeAnalysis(
   knex: Knex,
   turn: ImportTurn,
-  { analysis, offsetsSeconds, seeingFwhmArcsec }: Analysed,
+  { analysis, offsetsSeconds, correctionUnit, seeingFwhmArcsec }: Analysed,
 ): Promise<void> {
   const { id: importId, rigId, setupId } = turn.row;
   const { document } = analysis;
@@ -55,7 +56,7 @@ export async function storeAnalysis(
       nights.add(night);
       await RunModel.query(trx).insert({
         ...{ id, rigId, importId, setupId, night, seeingFwhmArcsec, run },
-        logOffsetSeconds,
+        ...{ logOffsetSeconds, correctionUnit },
         ...measuresOf(run),
         optics: document.optics,
         spectrum: spectrumOf(analysedRun),

@@ -26,6 +26,8 @@ export class RunModel extends BaseModel {
   declare subs: number | null;
   declare subsWithin: number | null;
   declare seeingFwhmArcsec: number | null;
+  /** null: the log has no corrections. */
+  declare correctionUnit: 'ms' | 'arcsec' | null;
   declare optics: Optics;
   declare run: Run;
   declare spectrum: SpectrumCurve | null;

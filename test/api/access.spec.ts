@@ -3,6 +3,7 @@ import {
   accessTokenPaths,
   accountPaths,
   byHandPaths,
+  exportPaths,
   columnMapPaths,
   importPaths,
   logImportSchema,
@@ -224,6 +225,12 @@ const RULES: Record<string, Rule> = {
         .post(byHandPaths.of(rig(), ids.run))
         .send({ action: 'set aside', fromSeconds: 0, toSeconds: 10, reason: 'Clouds' }),
   },
+  'get /api/v1/rigs/{rigId}/imports/{importId}/frames': get(onImport(exportPaths.frames), see(200)),
+  'get /api/v1/rigs/{rigId}/nights/{date}/archive': get(
+    () => exportPaths.night(rig(), ids.date),
+    see(200),
+  ),
+  'get /api/v1/rigs/{rigId}/archive': get(() => exportPaths.rig(rig()), see(200)),
   'delete /api/v1/rigs/{rigId}': {
     expected: own(204),
     send: (agent) => agent.delete(rigPaths.one(rig())),

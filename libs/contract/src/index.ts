@@ -2,6 +2,7 @@ export * from './access-token';
 export * from './account';
 export * from './analysis-document';
 export * from './by-hand';
+export * from './export';
 export * from './column-map';
 export * from './import';
 export * from './night';
