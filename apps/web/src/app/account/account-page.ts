@@ -11,10 +11,11 @@ import { FieldInput } from '../form/field-input';
 import { FormMessage } from '../form/form-message';
 import { FormSubmission } from '../form/form-submission';
 import { SignOut } from '../shell/sign-out';
+import { TokenList } from './token-list';
 
 @Component({
   selector: 'app-account-page',
-  imports: [DatePipe, Field, FieldInput, FormMessage, MatButton, ReactiveFormsModule],
+  imports: [DatePipe, Field, FieldInput, FormMessage, MatButton, ReactiveFormsModule, TokenList],
   templateUrl: './account-page.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { class: 'ruled' },
