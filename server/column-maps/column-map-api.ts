@@ -1,48 +1,94 @@
-import { columnMapPaths, createColumnMapSchema, savedColumnMapSchema } from '@stillpier/contract';
+import {
+  columnMapFileQuerySchema,
+  columnMapPathsOf,
+  columnMapSchema,
+  createColumnMapSchema,
+  ownColumnMapPaths,
+  ownColumnMapSchema,
+  savedColumnMapSchema,
+} from '@stillpier/contract';
 import * as z from 'zod';
 import type { Operation } from '../http/operation';
 
-const about = { tag: 'Column maps', signedIn: true } as const;
-const all = {
-  ...about,
-  path: columnMapPaths.all('{rigId}'),
-  params: z.object({ rigId: z.uuid() }),
-} as const;
-const one = {
-  ...about,
-  path: columnMapPaths.one('{rigId}', '{mapId}'),
-  params: z.object({ rigId: z.uuid(), mapId: z.uuid() }),
-} as const;
-const map = { description: 'The column map', schema: savedColumnMapSchema };
+interface Parent {
+  readonly whose: string;
+  readonly paths: ReturnType<typeof columnMapPathsOf>;
+  readonly params: { readonly rigId?: z.ZodUUID };
+  readonly schema: z.ZodType;
+}
 
-export const columnMapApi: readonly Operation[] = [
+const PARENTS: readonly Parent[] = [
   {
-    ...all,
-    method: 'get',
-    summary: 'The column maps of a rig, newest first',
-    answers: { 200: { description: 'The column maps', schema: z.array(savedColumnMapSchema) } },
-    problems: [400, 401, 404],
+    whose: 'of a rig',
+    paths: columnMapPathsOf('{rigId}'),
+    params: { rigId: z.uuid() },
+    schema: savedColumnMapSchema,
   },
   {
-    ...all,
-    method: 'post',
-    summary: 'Save a column map; it is tried on the next file with the same header line',
-    body: { schema: createColumnMapSchema },
-    answers: { 201: map },
-    problems: [400, 401, 403, 404],
-  },
-  {
-    ...one,
-    method: 'get',
-    summary: 'One column map',
-    answers: { 200: map },
-    problems: [400, 401, 404],
-  },
-  {
-    ...one,
-    method: 'delete',
-    summary: 'Delete a column map',
-    answers: { 204: { description: 'Deleted' } },
-    problems: [400, 401, 403, 404],
+    whose: 'of the account, for all its rigs',
+    paths: ownColumnMapPaths,
+    params: {},
+    schema: ownColumnMapSchema,
   },
 ];
+
+export const columnMapApi: readonly Operation[] = PARENTS.flatMap(operationsUnder);
+
+function operationsUnder({ whose, paths, params, schema }: Parent): Operation[] {
+  const about = { tag: 'Column maps', signedIn: true, params: z.object(params) } as const;
+  const ofMap = { ...about, params: z.object({ ...params, mapId: z.uuid() }) } as const;
+  const map = { description: 'The column map', schema };
+  return [
+    {
+      ...about,
+      method: 'get',
+      path: paths.all,
+      summary: `The column maps ${whose}, newest first`,
+      answers: { 200: { description: 'The column maps', schema: z.array(schema) } },
+      problems: [400, 401, 404],
+    },
+    {
+      ...about,
+      method: 'post',
+      path: paths.all,
+      summary: `Save a column map ${whose}; it is tried on the next file with the same header line`,
+      body: { schema: createColumnMapSchema },
+      answers: { 201: map },
+      problems: [400, 401, 403, 404],
+    },
+    {
+      ...about,
+      method: 'post',
+      path: paths.files,
+      summary: `Save a MAP.json as a column map ${whose}`,
+      query: columnMapFileQuerySchema,
+      body: { schema: columnMapSchema },
+      answers: { 201: map },
+      problems: [400, 401, 403, 404],
+    },
+    {
+      ...ofMap,
+      method: 'get',
+      path: paths.one('{mapId}'),
+      summary: `One column map ${whose}`,
+      answers: { 200: map },
+      problems: [400, 401, 404],
+    },
+    {
+      ...ofMap,
+      method: 'get',
+      path: paths.file('{mapId}'),
+      summary: `One column map ${whose} as a file: a MAP.json`,
+      answers: { 200: { description: 'The map alone', schema: columnMapSchema } },
+      problems: [400, 401, 404],
+    },
+    {
+      ...ofMap,
+      method: 'delete',
+      path: paths.one('{mapId}'),
+      summary: `Delete a column map ${whose}`,
+      answers: { 204: { description: 'Deleted' } },
+      problems: [400, 401, 403, 404],
+    },
+  ];
+}

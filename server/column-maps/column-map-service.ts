@@ -1,47 +1,77 @@
-import type { CreateColumnMap, SavedColumnMap } from '@stillpier/contract';
+import type { CreateColumnMap, OwnColumnMap, SavedColumnMap } from '@stillpier/contract';
 import type { Knex } from 'knex';
 import { notFound } from '../http/app-error';
-import { rigFor } from '../rigs/rig-access';
+import { rigFor, type RigRight } from '../rigs/rig-access';
 import { ColumnMapModel } from './column-map-model';
+
+/** Whose maps are meant: those of a rig, or with null those of the account itself. */
+type OfRig = string | null;
 
 export class ColumnMapService {
   constructor(private readonly knex: Knex) {}
 
-  async list(accountId: string, rigId: string): Promise<SavedColumnMap[]> {
-    await rigFor(this.knex, accountId, rigId, 'see');
-    return (await columnMapsOf(this.knex, rigId)).map(asColumnMap);
+  async list(accountId: string, ofRig: OfRig): Promise<(OwnColumnMap | SavedColumnMap)[]> {
+    const owner = await this.owner(accountId, ofRig, 'see');
+    return (await newestFirst(this.knex).where(owner)).map(asColumnMap);
   }
 
-  async one(accountId: string, rigId: string, mapId: string): Promise<SavedColumnMap> {
-    await rigFor(this.knex, accountId, rigId, 'see');
-    return asColumnMap(await this.columnMap(rigId, mapId));
+  async one(
+    accountId: string,
+    ofRig: OfRig,
+    mapId: string,
+  ): Promise<OwnColumnMap | SavedColumnMap> {
+    const owner = await this.owner(accountId, ofRig, 'see');
+    const map = await ColumnMapModel.query(this.knex).findOne({ id: mapId, ...owner });
+    if (!map) throw notFound('column map');
+    return asColumnMap(map);
   }
 
-  async create(accountId: string, rigId: string, map: CreateColumnMap): Promise<SavedColumnMap> {
-    await rigFor(this.knex, accountId, rigId, 'edit');
-    const { id } = await ColumnMapModel.query(this.knex).insert({ ...map, rigId });
-    return asColumnMap(await this.columnMap(rigId, id));
+  async create(
+    accountId: string,
+    ofRig: OfRig,
+    map: CreateColumnMap,
+  ): Promise<OwnColumnMap | SavedColumnMap> {
+    const owner = await this.owner(accountId, ofRig, 'edit');
+    const { id } = await ColumnMapModel.query(this.knex).insert({ ...map, ...owner });
+    return this.one(accountId, ofRig, id);
   }
 
-  async remove(accountId: string, rigId: string, mapId: string): Promise<void> {
-    await rigFor(this.knex, accountId, rigId, 'edit');
-    const removed = await ColumnMapModel.query(this.knex).delete().where({ id: mapId, rigId });
+  async remove(accountId: string, ofRig: OfRig, mapId: string): Promise<void> {
+    const owner = await this.owner(accountId, ofRig, 'edit');
+    const removed = await ColumnMapModel.query(this.knex)
+      .delete()
+      .where({ id: mapId, ...owner });
     if (removed === 0) throw notFound('column map');
   }
 
-  private async columnMap(rigId: string, mapId: string): Promise<ColumnMapModel> {
-    const map = await ColumnMapModel.query(this.knex).findOne({ id: mapId, rigId });
-    if (!map) throw notFound('column map');
-    return map;
+  private async owner(
+    accountId: string,
+    ofRig: OfRig,
+    right: RigRight,
+  ): Promise<{ rigId: string } | { accountId: string }> {
+    if (ofRig === null) return { accountId };
+    await rigFor(this.knex, accountId, ofRig, right);
+    return { rigId: ofRig };
   }
 }
 
-/** Newest first: of two that fit a file the one that was saved last is meant. */
-export function columnMapsOf(knex: Knex, rigId: string) {
-  return ColumnMapModel.query(knex).where({ rigId }).orderBy('createdAt', 'desc').orderBy('id');
+/** The maps that are tried on a log, in that order: the rig's, then those of who sent it. */
+export async function columnMapsFor(
+  knex: Knex,
+  rigId: string,
+  accountId: string | null,
+): Promise<ColumnMapModel[]> {
+  const ofRig = await newestFirst(knex).where({ rigId });
+  return accountId === null ? ofRig : [...ofRig, ...(await newestFirst(knex).where({ accountId }))];
 }
 
-function asColumnMap(saved: ColumnMapModel): SavedColumnMap {
+/** Of two that fit a file the one that was saved last is meant. */
+function newestFirst(knex: Knex) {
+  return ColumnMapModel.query(knex).orderBy('createdAt', 'desc').orderBy('id');
+}
+
+function asColumnMap(saved: ColumnMapModel): OwnColumnMap | SavedColumnMap {
   const { id, rigId, name, headerCells, map, createdAt } = saved;
-  return { id, rigId, name, headerCells, map, createdAt: createdAt.toISOString() };
+  const own = { id, name, headerCells, map, createdAt: createdAt.toISOString() };
+  return rigId === null ? own : { ...own, rigId };
 }

@@ -6,6 +6,7 @@ import * as nights from '../../migrations/20260901120000-create-nights';
 import * as accessTokens from '../../migrations/20260902090000-create-access-tokens';
 import * as byHandEntries from '../../migrations/20260902100000-create-by-hand-entries';
 import * as correctionUnit from '../../migrations/20260902110000-keep-the-correction-unit';
+import * as ownColumnMaps from '../../migrations/20260902120000-let-people-have-column-maps';
 
 /**
  * Every migration by name. Static imports, since they work alike from TypeScript and from the
@@ -20,4 +21,5 @@ export const migrations: Record<string, Knex.Migration> = {
   '20260902090000-create-access-tokens': accessTokens,
   '20260902100000-create-by-hand-entries': byHandEntries,
   '20260902110000-keep-the-correction-unit': correctionUnit,
+  '20260902120000-let-people-have-column-maps': ownColumnMaps,
 };

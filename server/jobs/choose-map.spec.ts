@@ -21,6 +21,20 @@ it('takes the first saved map that was made for the header line', () => {
   expect(chooseMap(OWN_HEADERS, null, [elsewhere, EXAMPLE_MAP, other])).toBe(EXAMPLE_MAP.map);
 });
 
+it('takes a map that came as a file where all columns that it names are there', () => {
+  const sent = { headerCells: null, map: EXAMPLE_MAP.map };
+  expect(chooseMap(OWN_HEADERS, null, [sent, other])).toBe(EXAMPLE_MAP.map);
+  expect(chooseMap(bytes('when,east\n1,2\n'), null, [sent])).toEqual({});
+  const byNumber = {
+    columns: {
+      '1': { role: 'time', unit: 'iso' },
+      '2': { role: 'raError', unit: 'arcsec' },
+      '3': { role: 'decError', unit: 'arcsec' },
+    },
+  } as const;
+  expect(chooseMap(OWN_HEADERS, null, [{ headerCells: null, map: byNumber }])).toEqual({});
+});
+
 it.each([
   ['other headers', bytes('a,b,c\n1,2,3\n')],
   ['binary data', new Uint8Array(400)],

@@ -1,7 +1,8 @@
 import { type ColumnMap, GuideLogError, previewGuideLog } from '@stillpier/guide-log';
 
 interface SavedMap {
-  readonly headerCells: readonly string[];
+  /** null: every header line that has the columns which the map names. */
+  readonly headerCells: readonly string[] | null;
   readonly map: ColumnMap;
 }
 
@@ -17,11 +18,18 @@ export function chooseMap(
   if (asked) return asked;
   if (previewWith(firstBytes, {})?.missing === null) return {};
   const fits = ({ headerCells, map }: SavedMap): boolean => {
-    const columns = previewWith(firstBytes, map)?.columns.map(({ header }) => header ?? '');
+    const preview = previewWith(firstBytes, map);
+    if (headerCells === null) return preview?.missing === null && namesHeaders(map);
+    const columns = preview?.columns.map(({ header }) => header ?? '');
     const headers = columns?.every((cell) => cell === '') ? [] : columns;
     return JSON.stringify(headers) === JSON.stringify(headerCells);
   };
   return saved.find(fits)?.map ?? {};
+}
+
+/** Whether a map names columns by their headers: by number alone it would fit nearly every file. */
+function namesHeaders({ columns = {} }: ColumnMap): boolean {
+  return Object.keys(columns).some((key) => !/^\d+$/.test(key));
 }
 
 /** null for a file that cannot be previewed this way: the reader says why when it comes to it. */

@@ -6,7 +6,7 @@ import {
   type LogReader,
 } from '@stillpier/guide-log';
 import type { Knex } from 'knex';
-import { ColumnMapModel } from '../column-maps/column-map-model';
+import { columnMapsFor } from '../column-maps/column-map-service';
 import { readChunks } from '../imports/import-chunks';
 import type { ImportModel } from '../imports/import-model';
 import { instantOfWallClock } from '../nights/night-date';
@@ -47,9 +47,6 @@ export async function readOriginal(
 }
 
 async function mapFor(knex: Knex, row: ImportModel, firstBytes: Buffer): Promise<ColumnMap> {
-  // Newest first: of two maps for one header line the one that was saved last is meant.
-  const saved = await ColumnMapModel.query(knex)
-    .where({ rigId: row.rigId })
-    .orderBy('createdAt', 'desc');
+  const saved = await columnMapsFor(knex, row.rigId, row.uploadedBy);
   return chooseMap(firstBytes, row.map, saved);
 }

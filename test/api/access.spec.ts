@@ -5,6 +5,9 @@ import {
   byHandPaths,
   exportPaths,
   columnMapPaths,
+  columnMapPathsOf,
+  ownColumnMapPaths,
+  ownColumnMapSchema,
   importPaths,
   logImportSchema,
   newAccessTokenSchema,
@@ -44,7 +47,7 @@ const TOKEN = { name: 'Dome', scope: 'read', expiresAt: '2126-01-01T00:00:00Z' }
 
 let app: TestApp;
 let cast: Cast;
-let ids: Record<'setup' | 'map' | 'import' | 'run' | 'date' | 'token', string>;
+let ids: Record<'setup' | 'map' | 'import' | 'run' | 'date' | 'token' | 'ownMap', string>;
 
 beforeAll(async () => {
   app = await makeApp();
@@ -58,7 +61,10 @@ beforeAll(async () => {
   const token = newAccessTokenSchema.parse(
     (await cast.owner.post(accessTokenPaths.all).send(TOKEN).expect(201)).body,
   ).id;
-  ids = { setup, map: await newMap(), import: log, run, date, token };
+  const ownMap = ownColumnMapSchema.parse(
+    (await cast.owner.post(ownColumnMapPaths.all).send(EXAMPLE_MAP).expect(201)).body,
+  ).id;
+  ids = { ownMap, setup, map: await newMap(), import: log, run, date, token };
   await worker.stop();
 });
 afterAll(() => app.close());
@@ -113,6 +119,27 @@ const RULES: Record<string, Rule> = {
     expected: { ...signedIn(404), owner: 204 },
     send: (agent) => agent.delete(accessTokenPaths.one(ids.token)),
   },
+  'get /api/v1/account/column-maps': get(() => ownColumnMapPaths.all, signedIn(200)),
+  'post /api/v1/account/column-maps': {
+    expected: signedIn(201),
+    send: (agent) => agent.post(ownColumnMapPaths.all).send(EXAMPLE_MAP),
+  },
+  'post /api/v1/account/column-maps/files': {
+    expected: signedIn(201),
+    send: (agent) => agent.post(`${ownColumnMapPaths.files}?name=A`).send(EXAMPLE_MAP.map),
+  },
+  'get /api/v1/account/column-maps/{mapId}': get(() => ownColumnMapPaths.one(ids.ownMap), {
+    ...signedIn(404),
+    owner: 200,
+  }),
+  'get /api/v1/account/column-maps/{mapId}/file': get(() => ownColumnMapPaths.file(ids.ownMap), {
+    ...signedIn(404),
+    owner: 200,
+  }),
+  'delete /api/v1/account/column-maps/{mapId}': {
+    expected: { ...signedIn(404), owner: 204 },
+    send: (agent) => agent.delete(ownColumnMapPaths.one(ids.ownMap)),
+  },
   'post /api/v1/password-resets': elsewhere,
   'put /api/v1/password-resets': elsewhere,
   'get /api/v1/openapi.json': get(() => '/api/v1/openapi.json', everyone),
@@ -164,6 +191,14 @@ const RULES: Record<string, Rule> = {
     expected: edit(201),
     send: (agent) => agent.post(columnMapPaths.all(rig())).send(EXAMPLE_MAP),
   },
+  'post /api/v1/rigs/{rigId}/column-maps/files': {
+    expected: edit(201),
+    send: (agent) => agent.post(`${columnMapPathsOf(rig()).files}?name=A`).send(EXAMPLE_MAP.map),
+  },
+  'get /api/v1/rigs/{rigId}/column-maps/{mapId}/file': get(
+    () => columnMapPathsOf(rig()).file(ids.map),
+    see(200),
+  ),
   'get /api/v1/rigs/{rigId}/column-maps/{mapId}': get(
     () => columnMapPaths.one(rig(), ids.map),
     see(200),
