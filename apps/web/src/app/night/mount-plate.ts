@@ -14,16 +14,22 @@ import { runTitle, type ShownRun } from './shown-run';
       <thead>
         <tr>
           <th scope="col">Measure</th>
-          <th scope="col" class="r">RA</th>
-          <th scope="col" class="r">Dec</th>
+          <th scope="col" class="r wide">RA</th>
+          <th scope="col" class="r wide">Dec</th>
         </tr>
       </thead>
       <tbody>
         @for (measure of measures(); track measure.name) {
           <tr class="values">
-            <th scope="row">{{ measure.name }}</th>
-            <td class="r">{{ measure.ra }}</td>
-            <td class="r">{{ measure.dec }}</td>
+            <th scope="row">
+              {{ measure.name }}
+              <span class="narrow">
+                <span>RA {{ measure.ra }}</span>
+                <span>Dec {{ measure.dec }}</span>
+              </span>
+            </th>
+            <td class="r wide">{{ measure.ra }}</td>
+            <td class="r wide">{{ measure.dec }}</td>
           </tr>
           <tr class="why">
             <td colspan="3">{{ measure.note }}</td>
@@ -46,9 +52,18 @@ import { runTitle, type ShownRun } from './shown-run';
       line-height: 17px;
       color: var(--ink-2);
     }
+    .narrow {
+      display: none;
+    }
     @media (max-width: 700px) {
-      .table td.r {
-        white-space: normal;
+      .wide {
+        display: none;
+      }
+      .narrow {
+        display: flex;
+        flex-wrap: wrap;
+        gap: 0 20px;
+        font: 400 13.5px/20px var(--mono);
       }
     }
   `,

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { importPaths, type Night } from '@stillpier/contract';
-import { countedText, countText } from '../figures/measure-text';
+import { countedText, countText, NO_VALUE } from '../figures/measure-text';
 import type { ShownRun } from './shown-run';
 
 const REASONS = ['dither', 'settling', 'star lost', 'by hand'] as const;
@@ -43,18 +43,24 @@ export class ReadingPlate {
 
   protected readonly reasons = REASONS;
   protected readonly aside = computed(() =>
-    this.runs().map(({ id, name, of: { run } }) => ({
-      id,
-      name,
-      frames: countText(run.frames),
-      used: countText(run.used),
-      counts: REASONS.map((reason) => {
-        const frames = run.setAside
+    this.runs().map(({ id, name, of: { run } }) => {
+      const counts = REASONS.map((reason) =>
+        run.setAside
           .filter((stretch) => stretch.reason === reason)
-          .reduce((sum, stretch) => sum + stretch.frames, 0);
-        return frames === 0 ? '–' : countText(frames);
-      }),
-    })),
+          .reduce((sum, stretch) => sum + stretch.frames, 0),
+      );
+      const texts = counts.map((frames) => (frames === 0 ? NO_VALUE : countText(frames)));
+      return {
+        id,
+        name,
+        frames: countText(run.frames),
+        used: countText(run.used),
+        counts: texts,
+        reasonsText: REASONS.flatMap((reason, i) =>
+          counts[i] ? [`${reason} ${texts[i]}`] : [],
+        ).join(', '),
+      };
+    }),
   );
 
   protected readonly lines = (count: number): string => countedText(count, 'line', 'lines');
