@@ -5,8 +5,15 @@ import { LevelWhitening } from './level-whitening';
 import { likeliestWalk } from './likeliest-walk';
 import { summedBefore } from './motion-frames';
 import { playInto } from './play';
-import { playStart } from './play-start';
-import { colourOf, dropBumps, PlayProfile, type ProfilePoint, trendColumns } from './play-profile';
+import { playStart, wayOf } from './play-start';
+import {
+  colourOf,
+  dropBumps,
+  PlayProfile,
+  type ProfileInput,
+  type ProfilePoint,
+  trendColumns,
+} from './play-profile';
 
 export interface BacklashInput {
   readonly timeSeconds: Float64Array;
@@ -88,9 +95,12 @@ function scannedProfile(input: BacklashInput): PlayProfile {
   const part = firstFrames(input);
   const trend = trendColumns(part.timeSeconds);
   const start = playStart(framesOf(part), trend, part.errorArcsec, driverOf(part));
-  const first = profileAt(part, start);
+  const first = profileAt(part, start, () => null);
   first.scan();
-  const profile = profileAt(input, first.best().width);
+  // Where the star stood inside the gap at first shows in the first frames, wherever the driver crosses the gap in them.
+  const crossed = wayOf(driverOf(part));
+  const lagOf = (width: number) => (width < crossed ? first.fit(width).lag : null);
+  const profile = profileAt(input, first.best().width, lagOf);
   profile.scan();
   for (let round = 0; round < REFINEMENTS; round++) refine(profile);
   return profile;
@@ -107,7 +117,7 @@ function firstFrames(input: BacklashInput): BacklashInput {
 }
 
 /** An empty profile whose noise model is that of one width. */
-function profileAt(input: BacklashInput, width: number): PlayProfile {
+function profileAt(input: BacklashInput, width: number, lagOf: ProfileInput['lagOf']): PlayProfile {
   const frames = framesOf(input);
   const driver = driverOf(input);
   const trend = trendColumns(input.timeSeconds);
@@ -117,7 +127,7 @@ function profileAt(input: BacklashInput, width: number): PlayProfile {
   const unfollowed = errorArcsec.map((error, n) => error - at(driven, n));
   const whitening = () =>
     new LevelWhitening({ ...frames, walkPerSecond: likeliestWalk(frames, trend, unfollowed) });
-  const given = { trend, errorArcsec, driver, responsePrior };
+  const given = { trend, errorArcsec, driver, responsePrior, lagOf };
   const plain = new PlayProfile({ ...given, whitening: whitening(), colour: ColourFilter.none() });
   dropBumps(plain.residual(plain.fit(width)), frames.used);
   const steady = { ...given, whitening: whitening() };

@@ -29,7 +29,7 @@ export function withoutBumps(
   const present = innovations.filter((value) => value !== 0);
   if (present.length === 0) return frames;
   const limit = BUMP_SIGMAS * robustSigma(present);
-  const used = Uint8Array.from(frames.used);
+  const used = frames.used.slice();
   const restarts = new Set(frames.restartFrames);
   let fading = 0;
   for (let n = 0; n < used.length; n++) {
@@ -74,5 +74,5 @@ function sideMedian(
     if (value === undefined) break;
     if (used[n] === 1) values.push(value);
   }
-  return values.length === 0 ? NaN : quantileInPlace(Float64Array.from(values), 0.5);
+  return values.length === 0 ? NaN : quantileInPlace(new Float64Array(values), 0.5);
 }

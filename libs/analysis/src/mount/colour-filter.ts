@@ -30,6 +30,7 @@ export class ColourFilter {
   /** In place, from the end: what a frame needs of the frames before it is still there. */
   apply(series: Float64Array): Float64Array {
     const { coefficients } = this;
+    if (coefficients.length === 0) return series;
     for (let n = series.length - 1; n >= 0; n--) {
       let value = series[n] ?? NaN;
       const reach = Math.min(n, coefficients.length);

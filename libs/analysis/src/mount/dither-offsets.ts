@@ -19,7 +19,7 @@ export function withoutJumps(
   const rest = motion.map((value, n) => value - (smooth[n] ?? 0));
   const before = levelsAlong(rest, frames, walkPerSecond, 1);
   const after = levelsAlong(rest, frames, walkPerSecond, -1);
-  const level = Float64Array.from(motion);
+  const level = motion.slice();
   const restarts = new Set(frames.restartFrames);
   let offset = after[0] ?? 0;
   for (let n = 0; n < level.length; n++) {

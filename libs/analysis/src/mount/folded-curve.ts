@@ -23,7 +23,7 @@ export function foldedCurve(
   return bins.map((values, bin) => {
     const phase = (bin + 0.5) / BINS;
     if (values.length === 0) return { phase, medianArcsec: null, q1Arcsec: null, q3Arcsec: null };
-    const work = Float64Array.from(values);
+    const work = new Float64Array(values);
     return {
       phase,
       medianArcsec: quantileInPlace(work, 0.5),

@@ -1,4 +1,4 @@
-import FFT from 'fft.js';
+import { powerOfTwoFrom, realSpectrum } from '../spectrum/real-spectrum';
 import { robustSigma } from '../statistics/robust-sigma';
 import { type LevelFrames } from './whitened-least-squares';
 
@@ -30,7 +30,7 @@ export function innovationLines(frames: LevelFrames, innovations: Float64Array):
   if (present.length < 30 || span <= 0) return [];
   const sigma = robustSigma(present);
   if (!(sigma > 0)) return [];
-  const size = 2 ** Math.ceil(Math.log2(LEAST_PADDING * (span / cadenceSeconds + 1)));
+  const size = powerOfTwoFrom(LEAST_PADDING * (span / cadenceSeconds + 1));
   const power = periodogram(frames, innovations, size, sigma * sigma * present.length);
   const threshold = Math.log((TRIALS_PER_FRAME * present.length) / FALSE_ALARM);
   const first = Math.ceil((FEWEST_TURNS / span) * size * cadenceSeconds);
@@ -61,8 +61,7 @@ function periodogram(
     const place = Math.round(((timeSeconds[n] ?? 0) - start) / cadenceSeconds);
     if (place < size) grid[place] = (grid[place] ?? 0) + (innovations[n] ?? 0);
   }
-  const spectrum = new Float64Array(2 * size);
-  new FFT(size).realTransform(spectrum, grid);
+  const spectrum = realSpectrum(size)(grid);
   const power = new Float64Array(size / 2);
   for (let bin = 0; bin < power.length; bin++) {
     power[bin] = ((spectrum[2 * bin] ?? 0) ** 2 + (spectrum[2 * bin + 1] ?? 0) ** 2) / unit;

@@ -8,6 +8,9 @@ export interface WhiteningInput {
   readonly walkPerSecond: number;
 }
 
+/** Far below what a double holds, whatever the next factor. */
+const LARGE_PRODUCT = 1e100;
+
 /**
  * Turns series that ride on a wandering level into series with white noise, so that plain least squares on the
  * turned series is generalised least squares on the first ones. Model: value = level + white noise, the level a
@@ -31,6 +34,8 @@ export class LevelWhitening {
     this.weight = new Float64Array(timeSeconds.length);
     let count = 0;
     let logDeterminant = 0;
+    // A logarithm a frame would cost more than all the rest: variances are multiplied up first.
+    let product = 1;
     let levelVariance = NaN; // NaN: the level is not known at all
     let restart = 0;
     for (let n = 0; n < timeSeconds.length; n++) {
@@ -50,11 +55,15 @@ export class LevelWhitening {
       this.gain[n] = levelVariance / innovationVariance;
       this.weight[n] = 1 / Math.sqrt(innovationVariance);
       levelVariance /= innovationVariance;
-      logDeterminant += Math.log(innovationVariance);
+      product *= innovationVariance;
+      if (product > LARGE_PRODUCT) {
+        logDeterminant += Math.log(product);
+        product = 1;
+      }
       count++;
     }
     this.count = count;
-    this.logDeterminant = logDeterminant;
+    this.logDeterminant = logDeterminant + Math.log(product);
   }
 
   /**

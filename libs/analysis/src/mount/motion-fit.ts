@@ -138,7 +138,7 @@ function residualOf(
   columns: readonly Float64Array[],
   fit: WhitenedFit,
 ): Float64Array {
-  const residual = Float64Array.from(series);
+  const residual = series.slice();
   columns.forEach((column, j) => {
     addScaled(residual, column, -(fit.coefficients[j] ?? 0));
   });

@@ -1,3 +1,4 @@
+import { turnInto } from '../spectrum/turning';
 import { type WhitenedFit } from './whitened-least-squares';
 
 /** A sine: cosine · cos(2π f t) + sine · sin(2π f t), t from the run's first frame. */
@@ -23,16 +24,14 @@ export function newLine(frequency: number): FittedLine {
 export function lineColumns(timeSeconds: Float64Array, line: FittedLine): Float64Array[] {
   const cosine = new Float64Array(timeSeconds.length);
   const sine = new Float64Array(timeSeconds.length);
+  turnInto(timeSeconds, 0, line.frequency, cosine, sine);
+  if (line.amplitude === 0) return [cosine, sine];
   const byFrequency = new Float64Array(timeSeconds.length);
   for (let n = 0; n < timeSeconds.length; n++) {
-    const time = timeSeconds[n] ?? 0;
-    const angle = 2 * Math.PI * line.frequency * time;
-    const [c, s] = [Math.cos(angle), Math.sin(angle)];
-    cosine[n] = c;
-    sine[n] = s;
-    byFrequency[n] = 2 * Math.PI * time * (line.sine * c - line.cosine * s);
+    const turned = line.sine * (cosine[n] ?? 0) - line.cosine * (sine[n] ?? 0);
+    byFrequency[n] = 2 * Math.PI * (timeSeconds[n] ?? 0) * turned;
   }
-  return line.amplitude === 0 ? [cosine, sine] : [cosine, sine, byFrequency];
+  return [cosine, sine, byFrequency];
 }
 
 /** The line as a fit left it: Gauss and Newton's step in the frequency. */
@@ -74,8 +73,9 @@ export function amplitudeError(
 
 /** Adds a line's sine to `out`. */
 export function sineInto(timeSeconds: Float64Array, line: FittedLine, out: Float64Array): void {
+  const [cosine, sine] = [new Float64Array(out.length), new Float64Array(out.length)];
+  turnInto(timeSeconds, 0, line.frequency, cosine, sine);
   for (let n = 0; n < out.length; n++) {
-    const angle = 2 * Math.PI * line.frequency * (timeSeconds[n] ?? 0);
-    out[n] = (out[n] ?? 0) + line.cosine * Math.cos(angle) + line.sine * Math.sin(angle);
+    out[n] = (out[n] ?? 0) + line.cosine * (cosine[n] ?? 0) + line.sine * (sine[n] ?? 0);
   }
 }

@@ -3,6 +3,7 @@ import { STAR_RATE_ARCSEC_PER_SECOND } from '../sky/earth-rotation';
 import { robustSigma } from '../statistics/robust-sigma';
 import { ColourFilter } from './colour-filter';
 import { type LevelWhitening } from './level-whitening';
+import { orthonormal, product, squaresWithout, without } from './orthonormal';
 import { playInto } from './play';
 import { START_LAGS, wayOf } from './play-start';
 
@@ -28,6 +29,8 @@ export interface ProfileInput {
   readonly driver: Float64Array;
   /** Standard deviation of the response about 1 as known beforehand. */
   readonly responsePrior: number;
+  /** The start of a gap of some width where it is known already; null: all are tried. */
+  readonly lagOf: (width: number) => number | null;
 }
 
 const COARSE_POINTS = 36;
@@ -53,8 +56,10 @@ export class PlayProfile {
     const { driver, errorArcsec } = input;
     this.count = input.whitening.count;
     this.driven = new Float64Array(driver.length);
-    this.trend = this.orthonormalTrend();
-    this.error = this.withoutTrend(this.white(errorArcsec, new Float64Array(driver.length)));
+    this.trend = orthonormal(
+      input.trend.map((power) => this.white(power, new Float64Array(power.length))),
+    );
+    this.error = without(this.trend, this.white(errorArcsec, new Float64Array(driver.length)));
     this.errorError = product(this.error, this.error);
   }
 
@@ -93,12 +98,14 @@ export class PlayProfile {
 
   /** What a fit leaves, whitened; 0 in frames that do not count. */
   residual(point: ProfilePoint): Float64Array {
-    const driven = this.withoutTrend(this.whitePlay(point.width, point.lag));
+    const driven = without(this.trend, this.whitePlay(point.width, point.lag));
     return this.error.map((error, n) => error - point.response * (driven[n] ?? NaN));
   }
 
   /** The best start inside the gap counts. */
   fit(width: number): ProfilePoint {
+    const known = this.input.lagOf(width);
+    if (known !== null) return this.fitFrom(width, known);
     const [first = 0, ...others] = START_LAGS;
     let best = this.fitFrom(width, first * width);
     for (const part of width > 0 ? others : []) {
@@ -111,8 +118,7 @@ export class PlayProfile {
   private fitFrom(width: number, lag: number): ProfilePoint {
     const moved = this.whitePlay(width, lag);
     // The error is free of the trend already: only the squares of the motion need it taken off.
-    let movedMoved = product(moved, moved);
-    for (const column of this.trend) movedMoved -= product(moved, column) ** 2;
+    const movedMoved = squaresWithout(this.trend, moved);
     const movedError = product(moved, this.error);
     // The prior is one more observation: response = 1, with the noise's own scale as unit.
     const noise = this.errorError / this.count;
@@ -138,22 +144,6 @@ export class PlayProfile {
 
   private white(series: ArrayLike<number>, out: Float64Array): Float64Array {
     return this.input.colour.apply(this.input.whitening.whiten(series, out));
-  }
-
-  private orthonormalTrend(): readonly Float64Array[] {
-    const columns: Float64Array[] = [];
-    for (const power of this.input.trend) {
-      const column = this.white(power, new Float64Array(power.length));
-      for (const before of columns) subtract(column, before, product(column, before));
-      const length = Math.sqrt(product(column, column));
-      if (length > 0) columns.push(column.map((value) => value / length));
-    }
-    return columns;
-  }
-
-  private withoutTrend(series: Float64Array): Float64Array {
-    for (const column of this.trend) subtract(series, column, product(series, column));
-    return series;
   }
 }
 
@@ -183,14 +173,4 @@ export function dropBumps(residual: Float64Array, used: Uint8Array): void {
 /** The filter that makes a residual white. */
 export function colourOf(residual: Float64Array): ColourFilter {
   return ColourFilter.fittedTo(residual, COLOUR_ORDER);
-}
-
-function subtract(from: Float64Array, column: Float64Array, times: number): void {
-  for (let n = 0; n < from.length; n++) from[n] = (from[n] ?? NaN) - times * (column[n] ?? NaN);
-}
-
-function product(a: Float64Array, b: Float64Array): number {
-  let sum = 0;
-  for (let n = 0; n < a.length; n++) sum += (a[n] ?? NaN) * (b[n] ?? NaN);
-  return sum;
 }

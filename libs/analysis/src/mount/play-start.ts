@@ -1,5 +1,7 @@
+import { LevelWhitening } from './level-whitening';
+import { orthonormal, squaresWithout } from './orthonormal';
 import { playInto } from './play';
-import { type LevelFrames, whitenedLeastSquares } from './whitened-least-squares';
+import { costOf, type LevelFrames } from './whitened-least-squares';
 
 /** The start inside the gap is not known: it is tried at these parts of the width. */
 export const START_LAGS = [0, 0.5, 1];
@@ -21,15 +23,22 @@ export function playStart(
 ): number {
   const way = wayOf(driver);
   const rest = new Float64Array(error.length);
+  const white = new Float64Array(error.length);
+  const levels = WALKS_PER_FRAME.map((walkPerFrame) => {
+    const walkPerSecond = walkPerFrame / frames.cadenceSeconds;
+    const whitening = new LevelWhitening({ ...frames, walkPerSecond });
+    const columns = trend.map((each) => whitening.whiten(each, new Float64Array(each.length)));
+    return { whitening, columns: orthonormal(columns) };
+  });
   let best = 0;
   let bestCost = Infinity;
   for (const part of [0, ...WIDTHS]) {
     for (const lag of part === 0 ? [0] : START_LAGS) {
       playInto(driver, part * way, lag * part * way, rest);
       for (let n = 0; n < rest.length; n++) rest[n] = (error[n] ?? NaN) - (rest[n] ?? NaN);
-      for (const walkPerFrame of WALKS_PER_FRAME) {
-        const walkPerSecond = walkPerFrame / frames.cadenceSeconds;
-        const { cost } = whitenedLeastSquares(frames, walkPerSecond, trend, rest);
+      for (const { whitening, columns } of levels) {
+        const squares = squaresWithout(columns, whitening.whiten(rest, white));
+        const cost = costOf(whitening, squares);
         if (cost < bestCost) [best, bestCost] = [part * way, cost];
       }
     }

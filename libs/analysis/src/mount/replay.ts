@@ -93,7 +93,7 @@ export function replayableAxis(
 /** The error that one axis would have shown, a value a frame; NaN where no star was measured. O(n). */
 export function replayAxis(axis: ReplayableAxis, change: ReplayChange): Float64Array {
   const cured = change.cured ?? [];
-  const star = Float64Array.from(axis.starArcsec);
+  const star = axis.starArcsec.slice();
   for (const cure of cured) {
     if (cure === 'backlash') continue;
     const parts = axis.parts[cure];
@@ -130,7 +130,7 @@ export function replayedRun(
 ): RunSeries {
   const raErrorArcsec = replayAxis(axes.ra, change.ra);
   const decErrorArcsec = replayAxis(axes.dec, change.dec);
-  const setAside = Uint8Array.from(run.setAside);
+  const setAside = run.setAside.slice();
   const within = {
     ra: SETTLED_SIGMAS * keptRms(raErrorArcsec, run.setAside),
     dec: SETTLED_SIGMAS * keptRms(decErrorArcsec, run.setAside),

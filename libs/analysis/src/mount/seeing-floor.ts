@@ -30,7 +30,7 @@ export function secondDifferenceNoise(motion: Float64Array, frames: LevelFrames)
     }
   }
   if (sizes.length < FEWEST_DIFFERENCES) return null;
-  const middle = quantileInPlace(Float64Array.from(sizes), 0.5);
+  const middle = quantileInPlace(new Float64Array(sizes), 0.5);
   return (MAD_TO_SIGMA * middle) / SECOND_DIFFERENCE_FACTOR;
 }
 

@@ -80,8 +80,11 @@ export function whitenedCost(
   return costOf(whitening, squaresByColumns.at(-1) ?? 0);
 }
 
-/** A residual of nothing at all has no likelihood: the smallest number keeps its logarithm finite. */
-function costOf(whitening: LevelWhitening, squares: number): number {
+/**
+ * Minus twice the logarithm of the likelihood of a sum of squares, but for a constant. A residual of nothing at all has
+ * none: the smallest number keeps its logarithm finite.
+ */
+export function costOf(whitening: LevelWhitening, squares: number): number {
   const { count, logDeterminant } = whitening;
   return count * Math.log(Math.max(squares, Number.MIN_VALUE)) + logDeterminant;
 }

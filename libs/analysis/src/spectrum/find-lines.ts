@@ -2,7 +2,7 @@ import { at } from '../statistics/at';
 import { localFalseAlarmProbability } from './false-alarm';
 import { type LocalNoise, type NoiseLevel, noiseLevel } from './noise-level';
 import { type Periodogram } from './periodogram';
-import { amplitudeOf, type SharpLine, sharpenLine, sineAt } from './sharpen-line';
+import { addSine, amplitudeOf, type Circle, type SharpLine, sharpenLine } from './sharpen-line';
 
 /** A line that stands above the noise around it. */
 export interface FoundLine {
@@ -46,6 +46,10 @@ export function findLines(
 ): FoundLine[] {
   let lines: SharpLine[] = [];
   const left = values.slice();
+  const circle = {
+    cosines: new Float64Array(left.length),
+    sines: new Float64Array(left.length),
+  };
   let power = squaredAmplitudes;
   const floor = ROUNDING * power.reduce((most, value) => Math.max(most, value), 0);
   let noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
@@ -58,12 +62,12 @@ export function findLines(
     if (fresh.length === 0 || lines.length >= MOST_LINES) break;
     const before = lines.slice();
     for (const frequency of fresh) {
-      const line = sharpenLine(timeSeconds, left, frequency, spectrum.resolutionHz / 2);
-      add(left, timeSeconds, line, -1);
+      const line = sharpenLine(timeSeconds, left, frequency, spectrum.resolutionHz / 2, circle);
+      addSine(left, timeSeconds, line, -1, circle);
       lines.push(line);
     }
     // What a first guess leaves beside a strong line must not pass for another.
-    sharpenTogether(spectrum, timeSeconds, left, lines);
+    sharpenTogether(spectrum, timeSeconds, left, lines, circle);
     power = spectrum.squaredAmplitudes(left);
     noise = noiseLevel(power, firstBin(spectrum), spectrum.stride, floor);
     const last = lines.at(-1);
@@ -161,23 +165,18 @@ function sharpenTogether(
   timeSeconds: Float64Array,
   left: Float64Array,
   lines: SharpLine[],
+  circle: Circle,
 ): void {
   for (let sweep = 0; sweep < SWEEPS && lines.length > 1; sweep++) {
     let moved = 0;
     lines.forEach((line, i) => {
-      add(left, timeSeconds, line, 1);
-      const sharper = sharpenLine(timeSeconds, left, line.frequency, resolutionHz / 4);
-      add(left, timeSeconds, sharper, -1);
+      addSine(left, timeSeconds, line, 1, circle);
+      const sharper = sharpenLine(timeSeconds, left, line.frequency, resolutionHz / 4, circle);
+      addSine(left, timeSeconds, sharper, -1, circle);
       lines[i] = sharper;
       const grown = Math.abs(amplitudeOf(sharper) / amplitudeOf(line) - 1);
       moved = Math.max(moved, grown, Math.abs(sharper.frequency - line.frequency) / resolutionHz);
     });
     if (moved < AT_REST) break;
-  }
-}
-
-function add(values: Float64Array, timeSeconds: Float64Array, line: SharpLine, sign: number): void {
-  for (let i = 0; i < values.length; i++) {
-    values[i] = at(values, i) + sign * sineAt(line, at(timeSeconds, i));
   }
 }

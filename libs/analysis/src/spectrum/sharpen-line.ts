@@ -1,4 +1,5 @@
 import { at } from '../statistics/at';
+import { turnInto } from './turning';
 
 /** A sine with its own straight line: c + d τ + a cos ωτ + b sin ωτ, τ the time from `origin`. */
 export interface SharpLine {
@@ -10,6 +11,12 @@ export interface SharpLine {
   readonly sine: number;
 }
 
+/** Cosines and sines of one line at all times. */
+export interface Circle {
+  readonly cosines: Float64Array;
+  readonly sines: Float64Array;
+}
+
 const PARAMETERS = 5;
 const STEPS = 3;
 /** Steps end when the frequency moves by less than this part of its reach. */
@@ -18,23 +25,25 @@ const SETTLED = 1e-4;
 /**
  * One sine in a series by least squares with its frequency free: Gauss-Newton steps from a frequency that is known to
  * a fraction of the resolution width, on the samples' own times, with a straight line free beside it (taking a trend
- * off first would take part of a slow sine with it). One pass a step, nothing allocated a sample. O(n).
+ * off first would take part of a slow sine with it). O(n).
  *
  * @param t n times.
  * @param y n values.
  * @param frequency First guess, in cycles per unit of t.
  * @param reach The frequency moves from the guess by this at most.
+ * @param circle Room to work in, as long as t.
  */
 export function sharpenLine(
   t: Float64Array,
   y: Float64Array,
   frequency: number,
   reach: number,
+  circle: Circle,
 ): SharpLine {
   const origin = (at(t, 0) + at(t, t.length - 1)) / 2;
   let line: SharpLine = { frequency, origin, constant: 0, slope: 0, cosine: 0, sine: 0 };
   for (let step = 0; step <= STEPS; step++) {
-    const solved = gaussNewton(t, y, line, step > 0);
+    const solved = gaussNewton(t, y, line, step > 0, circle);
     if (solved === null) return line;
     const [constant, slope, cosine, sine, turn] = solved;
     const moved = line.frequency + (turn ?? 0) / (2 * Math.PI);
@@ -51,10 +60,19 @@ export function sharpenLine(
   return line;
 }
 
-/** Value of the sine alone at a time. */
-export function sineAt(line: SharpLine, time: number): number {
-  const angle = 2 * Math.PI * line.frequency * (time - line.origin);
-  return line.cosine * Math.cos(angle) + line.sine * Math.sin(angle);
+/** Adds `factor` times the sine alone to a series. O(n). */
+export function addSine(
+  values: Float64Array,
+  t: Float64Array,
+  line: SharpLine,
+  factor: number,
+  { cosines, sines }: Circle,
+): void {
+  turnInto(t, line.origin, line.frequency, cosines, sines);
+  const [cosine, sine] = [factor * line.cosine, factor * line.sine];
+  for (let i = 0; i < values.length; i++) {
+    values[i] = at(values, i) + cosine * at(cosines, i) + sine * at(sines, i);
+  }
 }
 
 export function amplitudeOf(line: SharpLine): number {
@@ -70,8 +88,9 @@ function gaussNewton(
   y: Float64Array,
   line: SharpLine,
   turns: boolean,
+  { cosines, sines }: Circle,
 ): Float64Array | null {
-  const omega = 2 * Math.PI * line.frequency;
+  turnInto(t, line.origin, line.frequency, cosines, sines);
   const scale = Math.max(Math.abs(at(t, 0) - line.origin), Number.MIN_VALUE);
   let u1 = 0;
   let uu = 0;
@@ -94,8 +113,8 @@ function gaussNewton(
   let vd = 0;
   for (let i = 0; i < t.length; i++) {
     const time = at(t, i) - line.origin;
-    const c = Math.cos(omega * time);
-    const s = Math.sin(omega * time);
+    const c = at(cosines, i);
+    const s = at(sines, i);
     const u = time / scale;
     const d = u * (line.sine * c - line.cosine * s);
     const v = at(y, i);

@@ -12,7 +12,7 @@ import { requireSeries } from './series-error';
  */
 export function quantile(values: ArrayLike<number>, p: number): number {
   requireSeries('quantile', values, 1);
-  return quantileInPlace(Float64Array.from(values), p);
+  return quantileInPlace(new Float64Array(values), p);
 }
 
 /**
@@ -22,7 +22,7 @@ export function quantile(values: ArrayLike<number>, p: number): number {
  */
 export function median(values: ArrayLike<number>): number {
   requireSeries('median', values, 1);
-  return quantileInPlace(Float64Array.from(values), 0.5);
+  return quantileInPlace(new Float64Array(values), 0.5);
 }
 
 /** As `quantile`, on a work array of finite values that it may rearrange: no allocation. */

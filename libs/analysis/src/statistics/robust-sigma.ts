@@ -12,7 +12,7 @@ export const MAD_TO_SIGMA = 1.482602218505602;
  */
 export function medianAbsoluteDeviation(values: ArrayLike<number>): number {
   requireSeries('medianAbsoluteDeviation', values, 1);
-  const work = Float64Array.from(values);
+  const work = new Float64Array(values);
   const centre = quantileInPlace(work, 0.5);
   for (let i = 0; i < work.length; i++) work[i] = Math.abs(at(work, i) - centre);
   return quantileInPlace(work, 0.5);
