@@ -48,11 +48,14 @@ export function withoutBumps(
     if (fading > 0) used[n] = 0;
     fading--;
   }
-  const isSame =
-    restarts.size === frames.restartFrames.length &&
-    used.every((value, n) => value === frames.used[n]);
+  const isSame = restarts.size === frames.restartFrames.length && sameFrames(used, frames.used);
   if (isSame) return frames;
   return { ...frames, used, restartFrames: [...restarts].sort((a, b) => a - b) };
+}
+
+function sameFrames(a: Uint8Array, b: Uint8Array): boolean {
+  for (let n = 0; n < a.length; n++) if (a[n] !== b[n]) return false;
+  return true;
 }
 
 function stays(residual: Float64Array, used: Uint8Array, n: number): boolean {

@@ -79,27 +79,31 @@ function correctionLimit(commands: Float64Array): { lowest: number; highest: num
  */
 export function errorLag1(frames: LoopFrames): { lag1: number; pairs: number } | null {
   const { errorArcsec, setAside, timeSeconds, cadenceSeconds } = frames;
-  const stretches: number[][] = [[]];
-  errorArcsec.forEach((error, n) => {
-    const spacing = n === 0 ? 0 : (timeSeconds[n] ?? 0) - (timeSeconds[n - 1] ?? 0);
-    if (spacing > NEIGHBOURS * cadenceSeconds) stretches.push([]);
-    if (setAside[n] === 0 && Number.isFinite(error)) stretches.at(-1)?.push(error);
-    else stretches.push([]);
-  });
-  const all = stretches.flat();
-  if (all.length < FEWEST_PAIRS) return null;
-  const centre = all.reduce((sum, error) => sum + error, 0) / all.length;
+  const counts = (n: number) => setAside[n] === 0 && Number.isFinite(errorArcsec[n]);
+  let [count, sum] = [0, 0];
+  for (let n = 0; n < errorArcsec.length; n++) {
+    if (!counts(n)) continue;
+    count++;
+    sum += errorArcsec[n] ?? 0;
+  }
+  const centre = sum / count;
   let [products, pairs, squares] = [0, 0, 0];
-  for (const stretch of stretches) {
-    stretch.forEach((error, i) => {
-      squares += (error - centre) ** 2;
-      if (i === 0) return;
-      products += (error - centre) * ((stretch[i - 1] ?? 0) - centre);
-      pairs++;
-    });
+  let isBeforeCounted = false;
+  for (let n = 0; n < errorArcsec.length; n++) {
+    const isCounted = counts(n);
+    if (isCounted) {
+      const off = (errorArcsec[n] ?? 0) - centre;
+      const spacing = (timeSeconds[n] ?? 0) - (timeSeconds[n - 1] ?? 0);
+      squares += off * off;
+      if (isBeforeCounted && spacing <= NEIGHBOURS * cadenceSeconds) {
+        products += off * ((errorArcsec[n - 1] ?? 0) - centre);
+        pairs++;
+      }
+    }
+    isBeforeCounted = isCounted;
   }
   if (pairs < FEWEST_PAIRS || squares === 0) return null;
-  return { lag1: products / pairs / (squares / all.length), pairs };
+  return { lag1: products / pairs / (squares / count), pairs };
 }
 
 /** Part of the seeing that an integrator of gain k turns into true motion: sqrt(k/(2−k)), null for k of 2 or more. */

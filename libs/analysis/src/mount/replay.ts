@@ -93,15 +93,15 @@ export function replayableAxis(
 /** The error that one axis would have shown, a value a frame; NaN where no star was measured. O(n). */
 export function replayAxis(axis: ReplayableAxis, change: ReplayChange): Float64Array {
   const cured = change.cured ?? [];
-  const star = axis.starArcsec.slice();
+  const star = cured.length > 0 ? axis.starArcsec.slice() : axis.starArcsec;
   for (const cure of cured) {
     if (cure === 'backlash') continue;
     const parts = axis.parts[cure];
     // The guider takes the star where it stands: what is cured must not start with a jump.
     const start = parts[0] ?? 0;
-    parts.forEach((part, n) => {
-      star[n] = (star[n] ?? NaN) - (part - start);
-    });
+    for (let n = 0; n < star.length; n++) {
+      star[n] = (star[n] ?? NaN) - ((parts[n] ?? NaN) - start);
+    }
   }
   return guideAgain({
     starArcsec: star,
