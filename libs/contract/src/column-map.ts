@@ -2,8 +2,11 @@ import * as z from 'zod';
 
 export const COLUMN_ROLES = [
   'time',
+  'date',
   'raError',
   'decError',
+  'xError',
+  'yError',
   'raCorrection',
   'decCorrection',
   'raDirection',
@@ -39,6 +42,11 @@ export const COLUMN_UNITS = [
 const columnSchema = z.strictObject({
   role: z.enum(COLUMN_ROLES),
   unit: z.enum(COLUMN_UNITS).optional(),
+  sentinels: z
+    .array(z.string().trim().min(1).max(40))
+    .max(20)
+    .optional()
+    .describe('Cells of a column of numbers that mean "no value", as a blank does'),
 });
 
 /** MAP.json: how one kind of file is read. What is missing is found out from the file. */
@@ -60,6 +68,22 @@ export const columnMapSchema = z
       .enum(['same', 'opposite'])
       .optional()
       .describe('Whether a correction of +1 moves the star towards +error'),
+    dateOrder: z
+      .enum(['day-month-year', 'month-day-year'])
+      .optional()
+      .describe('Of dates whose year stands last; asked for where both readings are possible'),
+    cameraAngleDegrees: z
+      .number()
+      .min(-360)
+      .max(360)
+      .optional()
+      .describe(
+        'For xError and yError: from growing x to growing RA error (east), turning towards growing y; growing Dec error (north) lies a quarter turn further on',
+      ),
+    cameraMirrored: z
+      .boolean()
+      .optional()
+      .describe('Growing Dec error lies a quarter turn back instead'),
     targetDeclinationDegrees: z.number().min(-90).max(90).optional(),
     targetHourAngleHours: z.number().min(-12).max(12).optional(),
     startTime: z.iso.datetime({ offset: true }).optional(),

@@ -2,10 +2,10 @@ import {
   type ColumnMap,
   type ColumnRole,
   type ColumnUnit,
-  REQUIRED_ROLES,
   UNITS_OF_ROLE,
   UNIT_MAY_BE_LEFT_OUT,
 } from './column-map';
+import { type DateReading } from './date-order';
 import { type Dialect } from './dialect';
 import { GuideLogError } from './guide-log-error';
 import { knownHeader, plainWords } from './known-headers';
@@ -13,8 +13,11 @@ import { knownHeader, plainWords } from './known-headers';
 /** Roles as they are called in sentences. */
 export const ROLE_NAMES: Readonly<Record<ColumnRole, string>> = {
   time: 'time',
+  date: 'date',
   raError: 'RA error',
   decError: 'Dec error',
+  xError: 'x error',
+  yError: 'y error',
   raCorrection: 'RA correction',
   decCorrection: 'Dec correction',
   raDirection: 'RA direction',
@@ -38,6 +41,8 @@ export interface PlannedColumn {
   /** The header's text, or the 1-based number where there is no header. */
   readonly name: string;
   readonly from: 'map' | 'header';
+  /** Cells that mean "no value", from the map. */
+  readonly sentinels: readonly string[];
 }
 
 /** Which column is what. */
@@ -81,9 +86,9 @@ export function planColumns(dialect: Dialect, map: ColumnMap): ColumnPlan {
 
 /** What still has to be named before the log can be read, as a sentence; null when nothing is missing. */
 export function missingColumns(plan: ColumnPlan, dialect: Dialect): string | null {
-  const missing = REQUIRED_ROLES.filter(
-    (role) => !plan.columns.some((column) => column.role === role),
-  ).map((role) => `the ${ROLE_NAMES[role]}`);
+  const missing = requiredRoles(plan)
+    .filter((role) => !hasRole(plan, role))
+    .map((role) => `the ${ROLE_NAMES[role]}`);
   if (missing.length === 0) return null;
   const list = [missing.slice(0, -1).join(', '), missing.at(-1)].filter(Boolean).join(' and ');
   const where =
@@ -91,12 +96,56 @@ export function missingColumns(plan: ColumnPlan, dialect: Dialect): string | nul
   return `${where} has no column that is known as ${list}: a column map must say which it is.`;
 }
 
-/** @throws {GuideLogError} `columns-unknown`, `units-differ`: the plan cannot be read with. */
-export function checkPlan(plan: ColumnPlan, dialect: Dialect): void {
+/** Time and two errors: along RA and Dec, or along the camera's axes where only those are there. */
+export function requiredRoles(plan: ColumnPlan): readonly ColumnRole[] {
+  return hasCameraErrors(plan) ? ['time', 'xError', 'yError'] : ['time', 'raError', 'decError'];
+}
+
+/** Whether the errors are read along the camera's axes: errors along RA and Dec in the same file win. */
+export function hasCameraErrors(plan: ColumnPlan): boolean {
+  const hasSky = hasRole(plan, 'raError') || hasRole(plan, 'decError');
+  return !hasSky && (hasRole(plan, 'xError') || hasRole(plan, 'yError'));
+}
+
+/**
+ * Whether the log can be read with the plan.
+ *
+ * @throws {GuideLogError} `columns-unknown`, `units-differ`, `camera-angle`, `date-without-clock`, `date-order-open`.
+ */
+export function checkPlan(
+  plan: ColumnPlan,
+  dialect: Dialect,
+  dates: DateReading,
+  map: ColumnMap,
+): void {
   const missing = missingColumns(plan, dialect);
   if (missing !== null) throw new GuideLogError('columns-unknown', missing);
+  checkUnitsAgree(plan);
+  if (hasCameraErrors(plan) && map.cameraAngleDegrees === undefined) {
+    throw new GuideLogError(
+      'camera-angle',
+      "The errors run along the camera's axes: the column map must say how the camera is turned (cameraAngleDegrees).",
+    );
+  }
+  const time = plan.columns.find((column) => column.role === 'time');
+  if (hasRole(plan, 'date') && time?.unit !== 'clock') {
+    throw new GuideLogError(
+      'date-without-clock',
+      'A column of dates needs a time of day beside it: the time column must have the unit "clock".',
+    );
+  }
+  if (dates.openExample !== null) {
+    throw new GuideLogError(
+      'date-order-open',
+      `The date "${dates.openExample}" can be read with the day or with the month first: the column map must say which (dateOrder).`,
+    );
+  }
+}
+
+function checkUnitsAgree(plan: ColumnPlan): void {
   for (const [ra, dec] of [
     ['raError', 'decError'],
+    ['xError', 'yError'],
     ['raCorrection', 'decCorrection'],
   ] as const) {
     const units = plan.columns.filter((column) => column.role === ra || column.role === dec);
@@ -117,12 +166,17 @@ export function columnNames(dialect: Dialect): string[] {
   );
 }
 
+function hasRole(plan: ColumnPlan, role: ColumnRole): boolean {
+  return plan.columns.some((column) => column.role === role);
+}
+
 function mappedColumns(names: readonly string[], map: ColumnMap): PlannedColumn[] {
   const columns = Object.entries(map.columns ?? {}).map(([key, use]): PlannedColumn => {
     const index = columnIndex(names, key);
     const unit = use.unit ?? UNITS_OF_ROLE[use.role][0];
     checkUnit(key, use.role, use.unit);
-    return { role: use.role, unit, index, name: names[index] ?? key, from: 'map' };
+    const sentinels = use.sentinels ?? [];
+    return { role: use.role, unit, index, name: names[index] ?? key, from: 'map', sentinels };
   });
   columns.forEach((column, at) => {
     const sameRole = columns.findIndex((other) => other.role === column.role) !== at;
@@ -177,7 +231,7 @@ function recognisedColumns(dialect: Dialect, mapped: readonly PlannedColumn[]): 
   return (dialect.headerCells ?? []).flatMap((name, index): PlannedColumn[] => {
     const known = knownHeader(name);
     if (!known || mapped.some((column) => column.index === index)) return [];
-    return [{ ...known, index, name, from: 'header' }];
+    return [{ ...known, index, name, from: 'header', sentinels: [] }];
   });
 }
 

@@ -6,7 +6,7 @@ import { RowSplitter } from './row-splitter';
 /** In the order of preference where two explain a file equally well; the blank stands for runs of blanks. */
 const DELIMITERS = [',', ';', '\t', '|', ' '];
 /** Two known names in one line are a header; one may be a word in a sentence. */
-const KNOWN_NAMES_OF_A_HEADER = 2;
+export const KNOWN_NAMES_OF_A_HEADER = 2;
 
 /** How a file is written, found from its first lines or said by the map. */
 export interface Dialect {
@@ -73,19 +73,15 @@ export function sniffDialect(head: string, map: ColumnMap): Dialect {
 }
 
 function examine(head: string, delimiter: string, comment: string, map: ColumnMap): Candidate {
-  const isMapped = new Set(Object.keys(map.columns ?? {}).map(plainWords));
   const rows: HeadRow[] = [];
   const splitter = new RowSplitter({ delimiter, comment, expectedColumns: null }, (row, line) => {
     const isComment = row[0]?.trimStart().startsWith(comment) ?? false;
     const cells = row.map((cell) => cell.trim());
     if (isComment) cells[0] = cells[0]?.slice(comment.length).trim() ?? '';
     if (isComment && delimiter === ' ' && cells[0] === '') cells.shift();
-    const isKnown = (cell: string) =>
-      knownHeader(cell) !== undefined || (cell !== '' && isMapped.has(plainWords(cell)));
-    const knownNames = cells.filter((cell) => isKnown(cell) && !isFigure(cell)).length;
     const filled = cells.filter((cell) => cell !== '');
     const figures = filled.filter(isFigure).length / Math.max(1, filled.length);
-    rows.push({ cells, line, isComment, knownNames, figures });
+    rows.push({ cells, line, isComment, knownNames: knownNames(cells, map), figures });
   });
   splitter.finish(head.endsWith('\n') ? head.slice(0, -1) : head);
 
@@ -102,6 +98,14 @@ function examine(head: string, delimiter: string, comment: string, map: ColumnMa
     usualColumns: isTable ? usualColumns : 0,
     score: isTable ? usual.reduce((sum, row) => sum + row.figures, 0) : 0,
   };
+}
+
+/** How many cells are header texts that the map or the project's own words name. */
+export function knownNames(cells: readonly string[], map: ColumnMap): number {
+  const mapped = Object.keys(map.columns ?? {}).map(plainWords);
+  const isKnown = (cell: string) =>
+    knownHeader(cell) !== undefined || (cell !== '' && mapped.includes(plainWords(cell)));
+  return cells.filter((cell) => !isFigure(cell) && isKnown(cell)).length;
 }
 
 function isBetter(a: Candidate, b: Candidate): boolean {
@@ -152,11 +156,12 @@ function usualDecimal({ rows, delimiter }: Candidate): '.' | ',' {
 }
 
 const NUMBER = /^[+\-−]?(\d+[.,]?\d*|[.,]\d+)(e[+-]?\d+)?$/i;
-const DATE_OR_CLOCK = /^(\d[\d/.-]{5,9}[T ])?\d{1,2}:\d{2}[\d:.,]*\s*(Z|[+-][\d:]+)?$/i;
+const DATE = /^(\d{4}[-/]\d{2}[-/]\d{2}|\d{1,2}([-/.])\d{1,2}\2\d{4})$/;
+const CLOCK = /^(\d[\d/.-]{5,9}[T ])?\d{1,2}:\d{2}[\d:.,]*( ?[ap]m)?\s*(Z|[+-][\d:]+)?$/i;
 
-/** Number (with either decimal sign), clock, date with time, or NaN. */
-function isFigure(cell: string): boolean {
-  return NUMBER.test(cell) || DATE_OR_CLOCK.test(cell) || /^nan$/i.test(cell);
+/** Number (with either decimal sign), clock, date, date with time, or NaN. */
+export function isFigure(cell: string): boolean {
+  return NUMBER.test(cell) || CLOCK.test(cell) || DATE.test(cell) || /^nan$/i.test(cell);
 }
 
 function commonest(values: readonly number[]): number | undefined {

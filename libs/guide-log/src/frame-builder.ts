@@ -1,19 +1,22 @@
-import { COLUMN_ROLES, type ColumnMap, type ColumnRole, type TimeUnit } from './column-map';
-import { type ColumnPlan } from './column-plan';
+import {
+  COLUMN_ROLES,
+  type ColumnMap,
+  type ColumnRole,
+  type DateOrder,
+  type TimeUnit,
+} from './column-map';
+import { type ColumnPlan, hasCameraErrors } from './column-plan';
 import { pierSideCode } from './direction';
 import { GrowingCodes, GrowingNumbers } from './growing-arrays';
 import { type LogFrames } from './guide-log';
 import { NameColumn } from './name-column';
 import { NumberColumns, quoted } from './number-columns';
 import { StateColumn } from './state-column';
+import { declinationsOf, hourAnglesOf } from './target-place';
 import { TimeAxis } from './time-axis';
-import { readIsoTime } from './time-cell';
-
-/** Hours of hour angle that pass in one second: 1.00273790935 sidereal days a day (IAU 1982, Aoki et al.). */
-const HOUR_ANGLE_HOURS_PER_SECOND = 1.002_737_909_35 / 3600;
-
-/** Warnings of times that go back; a log with more of them has another trouble. */
-const LISTED_RESTARTS = 20;
+import { readDateTime } from './time-cell';
+import { TimeWatch } from './time-watch';
+import { unitWarnings } from './unit-check';
 
 const TIME_WORDS: Readonly<Record<TimeUnit, string>> = {
   seconds: 'a number',
@@ -30,7 +33,7 @@ export type InstantOfLocalTime = (localSeconds: number) => number;
 /** Rows of cells to columns of numbers; no row is kept. */
 export class FrameBuilder {
   /** 0-based column by role; -1 for a role that the log does not have. */
-  readonly #at: Readonly<Record<ColumnRole, number>>;
+  #at: Readonly<Record<ColumnRole, number>>;
   readonly #timeUnit: TimeUnit;
   readonly #axis: TimeAxis;
   readonly #times = new GrowingNumbers();
@@ -39,7 +42,8 @@ export class FrameBuilder {
   readonly #runs = new NameColumn();
   readonly #targets = new NameColumn();
   readonly #pierSides = new GrowingCodes();
-  readonly #restarts: string[] = [];
+  readonly #watch = new TimeWatch();
+  #unitWarnings: readonly string[] = [];
   #lastRun = '';
   #lastTarget = '';
   #startEpochSeconds: number | null = null;
@@ -49,18 +53,25 @@ export class FrameBuilder {
     private readonly plan: ColumnPlan,
     private readonly map: ColumnMap,
     decimal: '.' | ',',
+    private readonly dateOrder: DateOrder | null,
     private readonly instantOfLocalTime: InstantOfLocalTime | null,
   ) {
     const decimalCode = decimal.charCodeAt(0);
     this.#at = indexByRole(plan);
     this.#timeUnit = timeUnitOf(plan);
-    this.#axis = new TimeAxis(this.#timeUnit, decimalCode);
-    this.#numbers = new NumberColumns(plan, decimalCode);
+    this.#axis = new TimeAxis(this.#timeUnit, decimalCode, dateOrder);
+    this.#numbers = new NumberColumns(plan, map, decimalCode);
     this.#states = new StateColumn(map.states ?? {});
   }
 
   get count(): number {
     return this.#count;
+  }
+
+  /** Takes the columns at other places from here on: a header further down. */
+  rearrange(plan: ColumnPlan): void {
+    this.#at = indexByRole(plan);
+    this.#numbers.rearrange(plan);
   }
 
   /**
@@ -70,7 +81,7 @@ export class FrameBuilder {
    * @returns Why the row is refused, or null when it was taken.
    */
   add(cells: readonly string[], line: number, followsHeader: boolean): string | null {
-    const timeCell = cells[this.#at.time] ?? '';
+    const timeCell = this.#timeCell(cells);
     const rawSeconds = this.#axis.read(timeCell);
     if (Number.isNaN(rawSeconds)) {
       return timeCell.trim() === ''
@@ -84,15 +95,18 @@ export class FrameBuilder {
     const target = this.#cell(cells, this.#at.target);
     const changes = run !== this.#lastRun || target !== this.#lastTarget;
     const step = this.#axis.step(rawSeconds, changes || followsHeader);
-    if (step === 'backward') return `time goes back by ${this.#secondsBack(rawSeconds)} s`;
-    if (step === 'restart' && !changes && this.#restarts.length < LISTED_RESTARTS) {
-      this.#restarts.push(
-        `In line ${line} the time goes back by ${this.#secondsBack(rawSeconds)} s: a new run begins there.`,
-      );
+    if (step === 'backward') {
+      this.#watch.refusedBack(this.#axis.secondsBack(rawSeconds), line);
+      return `time goes back by ${this.#secondsBack(rawSeconds)} s`;
+    }
+    if (step === 'restart' && !changes) {
+      this.#watch.restarted(this.#axis.secondsBack(rawSeconds), line);
     }
     this.#lastRun = run;
     this.#lastTarget = target;
-    this.#times.append(this.#axis.take(rawSeconds, step));
+    const seconds = this.#axis.take(rawSeconds, step);
+    this.#times.append(seconds);
+    this.#watch.took(seconds, line, changes || followsHeader);
     this.#append(cells, run, target);
     return null;
   }
@@ -103,14 +117,18 @@ export class FrameBuilder {
     for (let at = 0; at < timeSeconds.length; at++)
       timeSeconds[at] = (timeSeconds[at] ?? 0) - first;
     const { map } = this;
-    const has = (role: ColumnRole) => this.#at[role] >= 0;
+    const has = (role: ColumnRole) => this.#unit(role) !== null;
+    const raError = this.#numbers.finish('raError') ?? new Float64Array(0);
+    const decError = this.#numbers.finish('decError') ?? new Float64Array(0);
+    const errorUnit = this.#errorUnit();
+    this.#unitWarnings = unitWarnings(raError, decError, errorUnit);
     return {
       count: this.#count,
       timeSeconds,
       startEpochSeconds: this.#startEpochSeconds,
-      raError: this.#numbers.finish('raError') ?? new Float64Array(0),
-      decError: this.#numbers.finish('decError') ?? new Float64Array(0),
-      errorUnit: this.#unit('raError') === 'guide px' ? 'guide px' : 'arcsec',
+      raError,
+      decError,
+      errorUnit,
       raCorrection: this.#numbers.finish('raCorrection'),
       decCorrection: this.#numbers.finish('decCorrection'),
       correctionUnit:
@@ -125,12 +143,9 @@ export class FrameBuilder {
       targetNames: this.#targets.names,
       declinationDegrees:
         this.#numbers.finish('declination') ??
-        mapped(map.targetDeclinationDegrees, timeSeconds, (degrees) => degrees),
+        declinationsOf(timeSeconds, map.targetDeclinationDegrees),
       hourAngleHours:
-        this.#numbers.finish('hourAngle') ??
-        mapped(map.targetHourAngleHours, timeSeconds, (hours, seconds) =>
-          withinHalfTurn(hours + seconds * HOUR_ANGLE_HOURS_PER_SECOND),
-        ),
+        this.#numbers.finish('hourAngle') ?? hourAnglesOf(timeSeconds, map.targetHourAngleHours),
       pierSide: has('pierSide') ? Uint8Array.from(this.#pierSides.finish()) : null,
     };
   }
@@ -142,7 +157,8 @@ export class FrameBuilder {
       ...(lacksZone
         ? ['The times carry no time zone, so that the instant of the start is not known.']
         : []),
-      ...this.#restarts,
+      ...this.#watch.warnings(),
+      ...this.#unitWarnings,
       ...this.#states.warnings(),
     ];
   }
@@ -160,14 +176,23 @@ export class FrameBuilder {
 
   /** Instant of the first frame: the log's own word, else the map's, else by the clock of the place, else not known. */
   #startOf(cells: readonly string[]): number | null {
-    const timeCell = cells[this.#at.time] ?? '';
+    const timeCell = this.#timeCell(cells);
     if (this.#timeUnit.startsWith('epoch')) return this.#axis.read(timeCell);
     const startCell = this.plan.startColumn && cells[this.plan.startColumn.index];
-    const times = [timeCell, startCell, this.map.startTime].map((cell) => readIsoTime(cell ?? ''));
+    const times = [timeCell, startCell, this.map.startTime].map((cell) =>
+      readDateTime(cell ?? '', this.dateOrder),
+    );
     const withZone = times.find((time) => time?.hasZone);
     if (withZone) return withZone.epochSeconds;
     const local = times.find((time) => time !== null);
     return local ? (this.instantOfLocalTime?.(local.epochSeconds) ?? null) : null;
+  }
+
+  /** The time; with a date beside it both together. */
+  #timeCell(cells: readonly string[]): string {
+    const timeCell = cells[this.#at.time] ?? '';
+    if (this.#at.date < 0) return timeCell;
+    return `${this.#cell(cells, this.#at.date).trim()} ${timeCell.trim()}`.trim();
   }
 
   /** A cell of a column that the log may not have. */
@@ -179,8 +204,15 @@ export class FrameBuilder {
     return Number(this.#axis.secondsBack(rawSeconds).toFixed(3));
   }
 
+  #errorUnit(): 'arcsec' | 'guide px' {
+    const unit = this.#unit(hasCameraErrors(this.plan) ? 'xError' : 'raError');
+    return unit === 'guide px' ? 'guide px' : 'arcsec';
+  }
+
+  /** null: the log has no such column. */
   #unit(role: ColumnRole) {
-    return this.plan.columns.find((column) => column.role === role)?.unit;
+    const column = this.plan.columns.find((planned) => planned.role === role);
+    return column ? column.unit : null;
   }
 }
 
@@ -194,20 +226,8 @@ function indexByRole(plan: ColumnPlan): Record<ColumnRole, number> {
 }
 
 function timeUnitOf(plan: ColumnPlan): TimeUnit {
+  // A time of day with its date beside it is a date and time.
+  if (plan.columns.some((column) => column.role === 'date')) return 'iso';
   const unit = plan.columns.find((column) => column.role === 'time')?.unit;
   return (unit as TimeUnit | undefined) ?? 'seconds';
-}
-
-/** A value of the map for every frame, or null when the map says nothing. */
-function mapped(
-  value: number | undefined,
-  timeSeconds: Float64Array,
-  at: (value: number, seconds: number) => number,
-): Float64Array | null {
-  return value === undefined ? null : timeSeconds.map((seconds) => at(value, seconds));
-}
-
-/** Hours in [-12, 12). */
-function withinHalfTurn(hours: number): number {
-  return ((((hours + 12) % 24) + 24) % 24) - 12;
 }

@@ -11,6 +11,10 @@ export type GuideLogFault =
   | 'map-unit'
   | 'role-twice'
   | 'units-differ'
+  | 'camera-angle'
+  | 'date-without-clock'
+  | 'date-order-open'
+  | 'too-many-lines'
   | 'every-line-refused';
 
 /** A log that cannot be read at all: `fault` for programs, `message` one plain sentence for people. */

@@ -1,18 +1,19 @@
-import { readIsoTime } from './time-cell';
+import { type DateOrder } from './column-map';
+import { readDateTime } from './time-cell';
 
-/** `2026-03-14T` */
+/** `2026-03-14T`, `14/03/2026 ` */
 const DATE_LENGTH = 11;
 /** `2026-03-14T21:40:07` */
 const SECONDS_END = 19;
 const LONGEST_FRACTION = 9;
 
 /**
- * A reader of ISO times in lines that follow each other: date and zone are read once and the rest of the time by its
- * characters, as long as they stay the same. It says the same as `readIsoTime`, several times faster.
+ * A reader of dates with times in lines that follow each other: date and zone are read once and the rest of the time by
+ * its characters, as long as they stay the same. It says the same as `readDateTime`, several times faster.
  *
  * @returns Cell to seconds since 1970-01-01T00:00Z, NaN where it is no time.
  */
-export function isoTimeReader(): (cell: string) => number {
+export function isoTimeReader(order: DateOrder | null): (cell: string) => number {
   let date = '';
   let zone = '';
   let midnightSeconds = NaN;
@@ -21,7 +22,7 @@ export function isoTimeReader(): (cell: string) => number {
       const ofDay = secondsOfDay(cell, zone);
       if (ofDay >= 0) return midnightSeconds + ofDay;
     }
-    const time = readIsoTime(cell);
+    const time = readDateTime(cell, order);
     if (time === null) return NaN;
     date = '';
     zone = /(?:Z|[+-][\d:]+)?$/i.exec(cell.slice(SECONDS_END))?.[0] ?? '';

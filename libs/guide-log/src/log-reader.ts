@@ -1,8 +1,7 @@
 import { type ColumnMap } from './column-map';
-import { checkPlan, type ColumnPlan } from './column-plan';
+import { checkPlan } from './column-plan';
 import { DecodedText } from './decoded-text';
-import { type Dialect } from './dialect';
-import { HEAD_BYTES, decodeHead, understandHead } from './file-head';
+import { HEAD_BYTES, decodeHead, understandHead, type UnderstoodHead } from './file-head';
 import { FrameBuilder, type InstantOfLocalTime } from './frame-builder';
 import { type GuideLog, type LineCounts } from './guide-log';
 import { GuideLogError } from './guide-log-error';
@@ -14,11 +13,15 @@ import { RowSplitter } from './row-splitter';
 const PIECE_BYTES = 65_536;
 /** A longer line is not one of a table; it would have to be kept in memory whole. */
 const LONGEST_LINE = 1_048_576;
+/** Seven weeks of a frame every two seconds. */
+export const MOST_LINES = 2_000_000;
 
 export interface LogReaderOptions {
   readonly map?: ColumnMap | undefined;
   /** For logs whose times carry no zone: the clock that they were written by. Without it their start is not known. */
   readonly instantOfLocalTime?: InstantOfLocalTime | undefined;
+  /** A file with more lines is refused as soon as that is seen; without it `MOST_LINES`. */
+  readonly mostLines?: number | undefined;
 }
 
 /** Takes the bytes of one log in pieces of any size; what comes out does not depend on where they were cut. */
@@ -30,16 +33,18 @@ export interface LogReader {
 }
 
 /** What is known once the first bytes are understood. */
-interface Opened {
-  readonly dialect: Dialect;
-  readonly plan: ColumnPlan;
+interface Opened extends UnderstoodHead {
   readonly builder: FrameBuilder;
   readonly sorter: LineSorter;
   readonly splitter: RowSplitter;
 }
 
 export function createLogReader(options: LogReaderOptions): LogReader {
-  return new StreamedLogReader(options.map ?? {}, options.instantOfLocalTime ?? null);
+  return new StreamedLogReader(
+    options.map ?? {},
+    options.instantOfLocalTime ?? null,
+    options.mostLines ?? MOST_LINES,
+  );
 }
 
 /**
@@ -68,6 +73,7 @@ class StreamedLogReader implements LogReader {
   constructor(
     private readonly map: ColumnMap,
     private readonly instantOfLocalTime: InstantOfLocalTime | null,
+    private readonly mostLines: number,
   ) {}
 
   push(chunk: Uint8Array): void {
@@ -113,12 +119,19 @@ class StreamedLogReader implements LogReader {
     const head = this.#head.subarray(0, this.#headLength);
     this.#decoded = new DecodedText(head);
     const text = decodeHead(head, isWholeFile, this.#decoded, this.#lineEnds);
-    const { dialect, plan } = understandHead(text, isWholeFile, this.map);
-    checkPlan(plan, dialect);
-    const builder = new FrameBuilder(plan, this.map, dialect.decimal, this.instantOfLocalTime);
-    const sorter = new LineSorter(dialect, builder);
+    const understood = understandHead(text, isWholeFile, this.map);
+    const { dialect, plan, dates } = understood;
+    checkPlan(plan, dialect, dates, this.map);
+    const builder = new FrameBuilder(
+      plan,
+      this.map,
+      dialect.decimal,
+      dates.order,
+      this.instantOfLocalTime,
+    );
+    const sorter = new LineSorter(dialect, plan, this.map, builder, this.mostLines);
     const splitter = new RowSplitter(dialect, sorter.take);
-    this.#opened = { dialect, plan, builder, sorter, splitter };
+    this.#opened = { ...understood, builder, sorter, splitter };
     this.#feed(text);
     return this.#opened;
   }
@@ -135,12 +148,12 @@ class StreamedLogReader implements LogReader {
     checkLineLength(this.#rest.length);
   }
 
-  #warnings({ builder, plan }: Opened): string[] {
+  #warnings({ builder, plan, sorter }: Opened): string[] {
     const encoding =
       this.#decoded?.encoding === 'windows-1252'
         ? ['The file is not UTF-8: it was read as Windows-1252.']
         : [];
-    return [...encoding, ...plan.warnings, ...builder.warnings()];
+    return [...encoding, ...plan.warnings, ...sorter.warnings, ...builder.warnings()];
   }
 }
 

@@ -1,9 +1,12 @@
-import { type ColumnRole } from './column-map';
-import { type ColumnPlan, ROLE_NAMES } from './column-plan';
+import { CameraAxes } from './camera-axes';
+import { type ColumnMap, type ColumnRole } from './column-map';
+import { type ColumnPlan, hasCameraErrors, ROLE_NAMES } from './column-plan';
 import { correctionWithSign } from './direction';
 import { GrowingNumbers } from './growing-arrays';
 import { isMissingCell, readNumber } from './number-cell';
+import { SentinelCells } from './sentinel-cells';
 
+/** RA and Dec error stand first: the camera's axes are turned in the first two places of a row. */
 const NUMBER_ROLES = [
   'raError',
   'decError',
@@ -16,15 +19,23 @@ const NUMBER_ROLES = [
 ] as const satisfies ColumnRole[];
 export type NumberRole = (typeof NUMBER_ROLES)[number];
 
+const CAMERA_ROLES: Partial<Record<NumberRole, ColumnRole>> = {
+  raError: 'xError',
+  decError: 'yError',
+};
+
 interface NumberColumn {
   readonly role: NumberRole;
-  readonly index: number;
+  /** What the file has it as; other than `role` for errors along the camera's axes. */
+  readonly readAs: ColumnRole;
+  index: number;
+  readonly sentinels: SentinelCells | null;
   readonly values: GrowingNumbers;
 }
 
 interface DirectionColumn {
   readonly role: 'raDirection' | 'decDirection';
-  readonly index: number;
+  index: number;
   /** Place of the correction that it gives a sign, in the row. */
   readonly correctionAt: number;
 }
@@ -35,14 +46,22 @@ export class NumberColumns {
   readonly #directions: readonly DirectionColumn[];
   /** The row that was read last. */
   readonly #row: Float64Array;
+  /** null: the errors are along RA and Dec as they stand. */
+  readonly #camera: CameraAxes | null;
 
   constructor(
     plan: ColumnPlan,
+    map: ColumnMap,
     private readonly decimalCode: number,
   ) {
+    this.#camera = hasCameraErrors(plan) ? new CameraAxes(map) : null;
     this.#columns = NUMBER_ROLES.flatMap((role): NumberColumn[] => {
-      const planned = plan.columns.find((column) => column.role === role);
-      return planned ? [{ role, index: planned.index, values: new GrowingNumbers() }] : [];
+      const readAs = this.#camera ? (CAMERA_ROLES[role] ?? role) : role;
+      const planned = plan.columns.find((column) => column.role === readAs);
+      if (!planned) return [];
+      const sentinels =
+        planned.sentinels.length > 0 ? new SentinelCells(planned.sentinels, decimalCode) : null;
+      return [{ role, readAs, index: planned.index, sentinels, values: new GrowingNumbers() }];
     });
     this.#directions = (
       [
@@ -57,6 +76,14 @@ export class NumberColumns {
     this.#row = new Float64Array(this.#columns.length);
   }
 
+  /** Takes the columns at other places from here on: a header further down. */
+  rearrange(plan: ColumnPlan): void {
+    const indexOf = (role: ColumnRole) =>
+      plan.columns.find((column) => column.role === role)?.index ?? -1;
+    for (const column of this.#columns) column.index = indexOf(column.readAs);
+    for (const direction of this.#directions) direction.index = indexOf(direction.role);
+  }
+
   /** Reads a row, corrections with their signs. @returns Why it cannot be read, or null. */
   read(cells: readonly string[]): string | null {
     for (let at = 0; at < this.#columns.length; at++) {
@@ -64,11 +91,13 @@ export class NumberColumns {
       if (!column) continue;
       const cell = cells[column.index] ?? '';
       const number = readNumber(cell, this.decimalCode);
-      if (Number.isNaN(number) && !isMissingCell(cell)) {
-        return `${ROLE_NAMES[column.role]} is not a number: ${quoted(cell)}`;
+      const isSentinel = column.sentinels?.has(cell, number) ?? false;
+      if (Number.isNaN(number) && !isSentinel && !isMissingCell(cell)) {
+        return `${ROLE_NAMES[column.readAs]} is not a number: ${quoted(cell)}`;
       }
-      this.#row[at] = number;
+      this.#row[at] = isSentinel ? NaN : number;
     }
+    this.#camera?.turn(this.#row);
     return this.#directions.length === 0 ? null : this.#applyDirections(cells);
   }
 

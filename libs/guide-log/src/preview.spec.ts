@@ -24,6 +24,8 @@ describe('the preview of a guide log', () => {
         { line: 4, cells: ['0', '1,5', '2', '7'] },
         { line: 5, cells: ['2', 'x', '3', '8'] },
       ],
+      dateOrder: null,
+      asksDateOrder: false,
       missing: null,
     });
   });

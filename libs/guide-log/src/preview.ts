@@ -1,8 +1,8 @@
-import { type ColumnMap, type ColumnRole, type ColumnUnit } from './column-map';
+import { type ColumnMap, type ColumnRole, type ColumnUnit, type DateOrder } from './column-map';
 import { checkPlan, columnNames, type ColumnPlan } from './column-plan';
 import { DecodedText, type Encoding } from './decoded-text';
 import { type Dialect } from './dialect';
-import { HEAD_BYTES, decodeHead, understandHead } from './file-head';
+import { HEAD_BYTES, decodeHead, understandHead, type UnderstoodHead } from './file-head';
 import { GuideLogError } from './guide-log-error';
 import { LineEnds } from './line-ends';
 import { RowSplitter } from './row-splitter';
@@ -27,6 +27,10 @@ export interface GuideLogPreview {
   /** 1-based; null for a file without a header. */
   readonly headerLine: number | null;
   readonly columns: readonly PreviewColumn[];
+  /** Of dates whose year stands last: told by the map, or the only one possible; null where there are none. */
+  readonly dateOrder: DateOrder | null;
+  /** Dates can be read with the day or with the month first: the map has to say which. */
+  readonly asksDateOrder: boolean;
   /** The first lines below the header, as they are split. */
   readonly rows: readonly { readonly line: number; readonly cells: readonly string[] }[];
   /** What stands in the way of reading the log, as one sentence; null when it can be read. */
@@ -45,7 +49,8 @@ export function previewGuideLog(firstBytes: Uint8Array, map: ColumnMap = {}): Gu
   const decoded = new DecodedText(head);
   const lineEnds = new LineEnds();
   const text = decodeHead(head, isWholeFile, decoded, lineEnds);
-  const { dialect, plan } = understandHead(text, isWholeFile, map);
+  const understood = understandHead(text, isWholeFile, map);
+  const { dialect, plan, dates } = understood;
   return {
     encoding: decoded.encoding,
     delimiter: dialect.delimiter,
@@ -53,7 +58,9 @@ export function previewGuideLog(firstBytes: Uint8Array, map: ColumnMap = {}): Gu
     headerLine: dialect.headerLine,
     columns: previewColumns(dialect, plan, map),
     rows: previewRows(text, isWholeFile, dialect),
-    missing: whatIsMissing(plan, dialect),
+    dateOrder: dates.order,
+    asksDateOrder: dates.openExample !== null,
+    missing: whatIsMissing(understood, map),
   };
 }
 
@@ -90,9 +97,9 @@ function previewRows(
   return rows;
 }
 
-function whatIsMissing(plan: ColumnPlan, dialect: Dialect): string | null {
+function whatIsMissing({ plan, dialect, dates }: UnderstoodHead, map: ColumnMap): string | null {
   try {
-    checkPlan(plan, dialect);
+    checkPlan(plan, dialect, dates, map);
     return null;
   } catch (error) {
     // The check speaks by throwing, since the reader cannot go on; here its sentence is the answer.

@@ -1,4 +1,4 @@
-import { type TimeUnit } from './column-map';
+import { type DateOrder, type TimeUnit } from './column-map';
 import { timeReader } from './time-reader';
 
 const SECONDS_PER_DAY = 86_400;
@@ -18,8 +18,9 @@ export class TimeAxis {
   constructor(
     private readonly unit: TimeUnit,
     decimalCode: number,
+    order: DateOrder | null,
   ) {
-    this.read = timeReader(unit, decimalCode);
+    this.read = timeReader(unit, decimalCode, order);
   }
 
   /** Seconds by which a time lies before the last one; negative or -Infinity when it does not. */

@@ -3,8 +3,11 @@ import { type ColumnRole, type ColumnUnit } from '@stillpier/guide-log';
 /** What a column can be, in the order of the picker. */
 export const ROLE_WORDS: Record<ColumnRole, string> = {
   time: 'Time',
+  date: 'Date, beside a time of day',
   raError: 'RA error',
   decError: 'Dec error',
+  xError: 'Error along x of the camera',
+  yError: 'Error along y of the camera',
   raCorrection: 'RA correction',
   decCorrection: 'Dec correction',
   raDirection: 'RA direction',
