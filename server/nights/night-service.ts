@@ -1,3 +1,4 @@
+import { nightSentence } from '@stillpier/analysis';
 import type { Night, NightSummary, PageQuery } from '@stillpier/contract';
 import type { Knex } from 'knex';
 import * as z from 'zod';
@@ -7,7 +8,6 @@ import { ImportModel } from '../imports/import-model';
 import { rigFor } from '../rigs/rig-access';
 import { asNightRun, asNightSummary, type RunWithSetup } from './night-answer';
 import { NightModel } from './night-model';
-import { sentenceOf } from './night-sentence';
 import { RunModel } from './run-model';
 
 const cursorSchema = z.object({ cursor: z.iso.date().optional() });
@@ -36,13 +36,12 @@ export class NightService {
     const night = await NightModel.query(this.knex).findById([rigId, date]);
     if (!night) throw notFound('night');
     const runs = await this.runs(rigId, date);
-    const summary = asNightSummary(night);
     return {
       rigId,
       rigName: rig.name,
       timeZone: rig.site.timeZone,
-      summary,
-      sentence: sentenceOf(summary),
+      summary: asNightSummary(night),
+      sentence: nightSentence(runs.map(({ run }) => run)),
       previous: await this.neighbour(rigId, '<', date),
       next: await this.neighbour(rigId, '>', date),
       runs: runs.map(asNightRun),

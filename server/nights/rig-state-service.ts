@@ -1,9 +1,9 @@
+import { nightSentence } from '@stillpier/analysis';
 import type { RigState } from '@stillpier/contract';
 import type { Knex } from 'knex';
 import { rigsOf } from '../rigs/rig-access';
 import { asNightSummary } from './night-answer';
 import { NightModel } from './night-model';
-import { sentenceOf } from './night-sentence';
 import { RunModel } from './run-model';
 
 const TREND_NIGHTS = 12;
@@ -22,13 +22,15 @@ export class RigStateService {
     const nightCount = await nights.clone().resultSize();
     const latest = await nights.orderBy('date', 'desc').limit(TREND_NIGHTS);
     const last = latest[0];
-    const longest = last && (await this.longestRun(rigId, last.date));
-    const summary = last ? asNightSummary(last) : null;
+    const runs = last ? await this.runsLongestFirst(rigId, last.date) : [];
+    const longest = runs[0];
     return {
       rigId,
       nightCount,
-      lastNight: summary,
-      sentence: summary ? sentenceOf(summary) : [{ text: 'No logs yet.', strong: false }],
+      lastNight: last ? asNightSummary(last) : null,
+      sentence: last
+        ? nightSentence(runs.map(({ run }) => run))
+        : [{ text: 'No logs yet.', strong: false }],
       footprint: longest?.run.footprint ?? null,
       seeingFwhmArcsec: longest?.seeingFwhmArcsec ?? null,
       imagingScaleArcsecPerPx: longest?.optics.imagingScaleArcsecPerPx ?? null,
@@ -40,10 +42,7 @@ export class RigStateService {
     };
   }
 
-  private longestRun(rigId: string, night: string) {
-    return RunModel.query(this.knex)
-      .where({ rigId, night })
-      .orderBy('durationSeconds', 'desc')
-      .first();
+  private runsLongestFirst(rigId: string, night: string) {
+    return RunModel.query(this.knex).where({ rigId, night }).orderBy('durationSeconds', 'desc');
   }
 }
