@@ -41,6 +41,8 @@ export * from './sky/earth-rotation';
 export * from './sky/hour-angle';
 export * from './sky/parallactic-angle';
 export * from './sky/sidereal-time';
+export * from './sky/sun-position';
+export * from './sky/twilight';
 export * from './spectrum/amplitude-curve';
 export * from './spectrum/amplitude-spectrum';
 export * from './spectrum/false-alarm';

@@ -9,6 +9,7 @@ import {
 } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { NightsApi, type StretchRequest } from '../api/nights-api';
+import { RigsApi } from '../api/rigs-api';
 import { nightDatesText, zoneOffsetText } from '../figures/clock';
 import { countedText, countText, percentText } from '../figures/measure-text';
 import { roundelHalfWidthArcsec } from '../figures/roundel/star-shape';
@@ -54,6 +55,7 @@ import { WormPlate } from './worm-plate';
 })
 export class NightPage {
   private readonly nightsApi = inject(NightsApi);
+  private readonly rigs = inject(RigsApi).list;
 
   readonly rigId = input.required<string>();
   readonly date = input.required<string>();
@@ -61,6 +63,11 @@ export class NightPage {
   protected readonly loaded = this.nightsApi.one(this.rigId, this.date);
   protected readonly night = computed(() =>
     this.loaded.hasValue() ? this.loaded.value() : undefined,
+  );
+  protected readonly site = computed(() =>
+    this.rigs.hasValue()
+      ? (this.rigs.value().find(({ id }) => id === this.rigId())?.site ?? null)
+      : null,
   );
   protected readonly runs = computed(() => shownRuns(this.night()?.runs ?? []));
   private readonly chosenId = linkedSignal<string | null>(

@@ -1,8 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import type { Site } from '@stillpier/contract';
 import type { RunStretch } from '../api/run-stretch';
 import { countedText, percentText, ratioText, secondsText } from '../figures/measure-text';
 import { NightRibbon } from '../figures/night-ribbon/night-ribbon';
 import { endMs, type RibbonRun } from '../figures/night-ribbon/ribbon-night';
+import { nightSpells, ribbonSkies, skyText, sunDown } from './night-sky';
 import type { ShownRun } from './shown-run';
 
 const EDGE_MS = 20 * 60_000;
@@ -19,6 +21,10 @@ export class NightPlate {
   readonly runs = input.required<readonly ShownRun[]>();
   readonly chosen = input.required<ShownRun>();
   readonly timeZone = input.required<string>();
+  /** Of the evening. */
+  readonly date = input.required<string>();
+  /** null until it is known. */
+  readonly site = input.required<Site | null>();
   readonly stretches = input.required<ReadonlyMap<string, RunStretch>>();
   readonly choose = output<string>();
 
@@ -40,10 +46,21 @@ export class NightPlate {
           ],
     ),
   );
-  protected readonly sight = computed(() => ({
-    fromMs: Math.min(...this.ribbonRuns().map((run) => run.startMs)) - EDGE_MS,
-    toMs: Math.max(...this.ribbonRuns().map(endMs)) + EDGE_MS,
-  }));
+  private readonly spells = computed(() => {
+    const site = this.site();
+    return site ? nightSpells(site, this.date()) : [];
+  });
+  protected readonly skies = computed(() => ribbonSkies(this.spells()));
+  protected readonly skyText = computed(() => skyText(this.spells(), this.timeZone()));
+  /** From before sunset to after sunrise, and wide enough for every run. */
+  protected readonly sight = computed(() => {
+    const night = sunDown(this.skies());
+    const starts = this.ribbonRuns().map((run) => run.startMs);
+    return {
+      fromMs: Math.min(...starts, ...(night ? [night.setMs] : [])) - EDGE_MS,
+      toMs: Math.max(...this.ribbonRuns().map(endMs), ...(night ? [night.riseMs] : [])) + EDGE_MS,
+    };
+  });
 
   /** Runs may differ in their setups, and so in the length of a sub. */
   protected readonly forecasts = computed(() => {

@@ -33,6 +33,7 @@ async function renderRibbon(runs: RibbonRun[]) {
   };
   set('label', '1 of 2 subs within the keep limit.');
   set('runs', runs);
+  set('skies', []);
   set('selectedId', 'b');
   set('fromMs', START - HOUR);
   set('toMs', START + 6 * HOUR);

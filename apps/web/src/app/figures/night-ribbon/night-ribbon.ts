@@ -5,6 +5,7 @@ import { elementWidthPx } from '../element-width';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { ratioText } from '../measure-text';
 import { endMs, subCells, type RibbonRun } from './ribbon-night';
+import type { RibbonSky } from './ribbon-sky';
 import { tallRibbon, tallTimeScale } from './tall-ribbon';
 import { timeScale, wideRibbon, type RibbonView } from './wide-ribbon';
 
@@ -35,6 +36,8 @@ export class NightRibbon {
   /** Says the result. */
   readonly label = input.required<string>();
   readonly runs = input.required<readonly RibbonRun[]>();
+  /** Empty where the site is not known. */
+  readonly skies = input.required<readonly RibbonSky[]>();
   readonly selectedId = input.required<string | null>();
   readonly fromMs = input.required<number>();
   readonly toMs = input.required<number>();
@@ -46,6 +49,7 @@ export class NightRibbon {
   private readonly tall = computed(() => this.widthPx() < TALL_BELOW_PX);
   protected readonly view = computed((): RibbonView => ({
     runs: this.runs(),
+    skies: this.skies(),
     selectedId: this.selectedId(),
     fromMs: this.fromMs(),
     toMs: this.toMs(),

@@ -9,6 +9,7 @@ import {
   type EnvelopeColumn,
   type RibbonRun,
 } from './ribbon-night';
+import { skyShapes } from './ribbon-sky';
 import { halfBandArcsec, topAspect, type RibbonDrawing, type RibbonView } from './wide-ribbon';
 
 const LEFT_PX = 46;
@@ -38,6 +39,7 @@ export function tallRibbon(view: RibbonView): RibbonDrawing {
   return {
     heightPx: endPx + 10,
     shapes: [
+      ...skyShapes(view.skies, y, { startPx: LEFT_PX, sizePx: 2 * (CENTRE_PX - LEFT_PX) }, true),
       ...heads(view),
       ...clockTicks(view.fromMs, view.toMs, (endPx - TOP_PX) / 40, view.timeZone).flatMap((ms) => [
         text(LEFT_PX - 8, y(ms) + 4, clockText(ms, view.timeZone), 'axis', 'end'),

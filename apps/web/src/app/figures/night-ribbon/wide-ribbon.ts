@@ -9,9 +9,12 @@ import {
   type EnvelopeColumn,
   type RibbonRun,
 } from './ribbon-night';
+import { type RibbonSky, skyNames, skyShapes } from './ribbon-sky';
 
 export interface RibbonView {
   readonly runs: readonly RibbonRun[];
+  /** Empty where the site is not known. */
+  readonly skies: readonly RibbonSky[];
   readonly selectedId: string | null;
   readonly fromMs: number;
   readonly toMs: number;
@@ -25,7 +28,7 @@ export interface RibbonDrawing {
 }
 
 const LEFT_PX = 44;
-const TOP_PX = 14;
+const TOP_PX = 34;
 const BAND_PX = 140;
 const CENTRE_PX = TOP_PX + BAND_PX / 2;
 const BAND_END_PX = TOP_PX + BAND_PX;
@@ -63,6 +66,9 @@ export function wideRibbon(view: RibbonView): RibbonDrawing {
   return {
     heightPx: endPx + 34,
     shapes: [
+      rect(LEFT_PX, TOP_PX, view.widthPx - LEFT_PX, BAND_PX, 'band'),
+      ...skyShapes(view.skies, x, { startPx: TOP_PX, sizePx: BAND_PX }, false),
+      ...skyNames(view.skies, x, TOP_PX - 18, view.timeZone),
       ...bandScale(view.widthPx, pxPerArcsec, halfArcsec),
       ...view.runs.flatMap((run, i) => [
         ...envelopeShapes(envelopes[i] ?? [], x, pxPerArcsec),
@@ -81,7 +87,6 @@ function bandScale(widthPx: number, pxPerArcsec: number, halfArcsec: number): Sh
   const up = CENTRE_PX - mark * pxPerArcsec;
   const down = CENTRE_PX + mark * pxPerArcsec;
   return [
-    rect(LEFT_PX, TOP_PX, widthPx - LEFT_PX, BAND_PX, 'band'),
     text(LEFT_PX - 8, up + 4, label, 'axis ra', 'end'),
     text(LEFT_PX - 8, CENTRE_PX + 4, '0', 'axis', 'end'),
     text(LEFT_PX - 8, down + 4, label, 'axis dec', 'end'),
