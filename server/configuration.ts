@@ -13,6 +13,10 @@ const environmentSchema = z.object({
   TRUST_PROXY: z.coerce.number().int().min(0).default(0),
   /** The largest guide log that is taken. */
   UPLOAD_LIMIT_MIB: z.coerce.number().int().min(1).default(200),
+  /** The most that a compressed guide log may unpack to. */
+  UNPACKED_LIMIT_MIB: z.coerce.number().int().min(1).default(800),
+  /** The most lines that a guide log may have. */
+  LINE_LIMIT: z.coerce.number().int().min(1).default(2_000_000),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   NODE_ENV: z.enum(['development', 'test', 'production']).default('development'),
   /** Sender of the e-mails; made from PUBLIC_URL when it is missing. */

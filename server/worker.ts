@@ -10,7 +10,8 @@ import { senderOf } from './mail/send-mail-task';
 const SWEEP_MS = 1000;
 const GRACE_MS = 2000;
 
-const { DATABASE_URL, SMTP_URL, PUBLIC_URL, MAIL_FROM, LOG_LEVEL } = configurationOrExit();
+const configuration = configurationOrExit();
+const { DATABASE_URL, SMTP_URL, PUBLIC_URL, MAIL_FROM, LOG_LEVEL } = configuration;
 const logger = pino({ level: LOG_LEVEL });
 const log = (message: string, error?: unknown): void => {
   if (error === undefined) logger.warn(message);
@@ -23,10 +24,14 @@ const mail = {
   publicUrl: PUBLIC_URL,
   sender: senderOf(PUBLIC_URL, MAIL_FROM),
 };
+const limits = {
+  unpackedMib: configuration.UNPACKED_LIMIT_MIB,
+  lines: configuration.LINE_LIMIT,
+};
 const worker = await startWorker({
   databaseUrl: DATABASE_URL,
   knex,
-  tasks: taskList({ mail, log }),
+  tasks: taskList({ mail, limits, log }),
   sweepMs: SWEEP_MS,
   graceMs: GRACE_MS,
   log,

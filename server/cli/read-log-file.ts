@@ -1,7 +1,7 @@
 import { createReadStream } from 'node:fs';
-import { pipeline, type Readable } from 'node:stream';
-import { createGunzip } from 'node:zlib';
+import { type Readable } from 'node:stream';
 import { type ColumnMap, createLogReader, type GuideLog } from '@stillpier/guide-log';
+import { unpacked } from '../imports/unpacked';
 import { instantOfWallClock } from '../nights/night-date';
 import { whyUnreadable } from './why-unreadable';
 
@@ -30,30 +30,4 @@ export async function readLogFile(
     throw whyUnreadable(file === '-' ? 'standard input' : file, error);
   }
   return reader.finish();
-}
-
-async function* unpacked(bytes: AsyncIterable<Uint8Array>): AsyncGenerator<Uint8Array> {
-  const chunks = bytes[Symbol.asyncIterator]();
-  let head = new Uint8Array(0);
-  while (head.length < 2) {
-    const next = await chunks.next();
-    if (next.done) break;
-    head = Buffer.concat([head, next.value]);
-  }
-  const whole = rejoined(head, chunks);
-  if (head[0] === 0x1f && head[1] === 0x8b) yield* gunzipped(whole);
-  else yield* whole;
-}
-
-async function* rejoined(
-  head: Uint8Array,
-  rest: AsyncIterator<Uint8Array>,
-): AsyncGenerator<Uint8Array> {
-  yield head;
-  for (let next = await rest.next(); !next.done; next = await rest.next()) yield next.value;
-}
-
-async function* gunzipped(bytes: AsyncIterable<Uint8Array>): AsyncGenerator<Uint8Array> {
-  // The callback has nothing to do: whoever reads on from the stream gets the error.
-  yield* pipeline(bytes, createGunzip(), () => undefined) as AsyncIterable<Uint8Array>;
 }

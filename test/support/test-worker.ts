@@ -5,7 +5,10 @@ import { makeKnex } from '../../server/database/connection';
 import { startWorker } from '../../server/jobs/start-worker';
 import { READ_LOG_TASK } from '../../server/imports/start-reading';
 import { readLogTask } from '../../server/jobs/read-log-task';
+import type { ReadingLimits } from '../../server/jobs/reading-limits';
 import { type Agent, type TestApp } from './api-app';
+
+const STANDARD_LIMITS: ReadingLimits = { unpackedMib: 800, lines: 2_000_000 };
 
 export interface TestWorker {
   readonly logged: string[];
@@ -13,7 +16,10 @@ export interface TestWorker {
 }
 
 /** The real worker within the process of the spec; what it logs is kept. Mails are left to `TestApp.mailsTo`. */
-export async function startTestWorker(app: TestApp): Promise<TestWorker> {
+export async function startTestWorker(
+  app: TestApp,
+  limits: ReadingLimits = STANDARD_LIMITS,
+): Promise<TestWorker> {
   const logged: string[] = [];
   const log = (message: string, error?: unknown): void => {
     logged.push(error === undefined ? message : `${message}: ${inspect(error)}`);
@@ -22,7 +28,7 @@ export async function startTestWorker(app: TestApp): Promise<TestWorker> {
   const worker = await startWorker({
     databaseUrl: app.databaseUrl,
     knex,
-    tasks: { [READ_LOG_TASK]: readLogTask(knex, log) },
+    tasks: { [READ_LOG_TASK]: readLogTask({ knex, limits, log }) },
     sweepMs: 200,
     graceMs: 1,
     log,
