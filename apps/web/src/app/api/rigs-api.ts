@@ -1,5 +1,5 @@
 import { HttpClient, httpResource, type HttpResourceRef } from '@angular/common/http';
-import { inject, Injectable, type Signal } from '@angular/core';
+import { computed, inject, Injectable, type Signal } from '@angular/core';
 import { type CreateRig, type Rig, rigPaths, rigSchema } from '@stillpier/contract';
 import { firstValueFrom } from 'rxjs';
 import * as z from 'zod';
@@ -24,6 +24,15 @@ export class RigsApi {
 
   one(rigId: Signal<string>): HttpResourceRef<Rig | undefined> {
     return httpResource(() => rigPaths.one(rigId()), { parse: (body) => rigSchema.parse(body) });
+  }
+
+  /** Whether the account is the rig's owner or an operator: not before the list has come. */
+  mayEdit(rigId: Signal<string>): Signal<boolean> {
+    return computed(() => {
+      const rigs = this.list.hasValue() ? this.list.value() : [];
+      const role = rigs.find(({ id }) => id === rigId())?.role;
+      return role === 'owner' || role === 'operator';
+    });
   }
 
   async create(body: CreateRig): Promise<Rig> {

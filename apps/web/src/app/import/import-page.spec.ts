@@ -10,6 +10,7 @@ import {
   rigPaths,
   setupPaths,
 } from '@stillpier/contract';
+import { FakeEventSource } from '../../testing/fake-event-source';
 import { ImportPage } from './import-page';
 
 const RIG = '11111111-1111-4111-8111-111111111111';
@@ -60,22 +61,6 @@ const OTHER = new File(
   ['clock,dRA,dDec\n18:42:15,0.45,-0.67\n18:42:17,-0.01,0.09\n'],
   'guide_2026-11-28.csv',
 );
-
-/** The browser's event stream, faked: `tell` is the server speaking. */
-class FakeEventSource {
-  static last: FakeEventSource;
-  private listener: ((event: MessageEvent<string>) => void) | undefined;
-  readonly close = vi.fn();
-  constructor(readonly url: string) {
-    FakeEventSource.last = this;
-  }
-  addEventListener(_type: string, listener: (event: MessageEvent<string>) => void) {
-    this.listener = listener;
-  }
-  tell(event: LogImport) {
-    this.listener?.(new MessageEvent('import', { data: JSON.stringify(event) }));
-  }
-}
 
 async function renderImport() {
   vi.stubGlobal('EventSource', FakeEventSource);

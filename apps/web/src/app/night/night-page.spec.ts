@@ -2,7 +2,15 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { DeferBlockBehavior, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import { type Finding, type Night, type NightRun, nightPaths, type Run } from '@stillpier/contract';
+import {
+  byHandPaths,
+  type Finding,
+  type Night,
+  type NightRun,
+  nightPaths,
+  type Run,
+} from '@stillpier/contract';
+import { FakeEventSource } from '../../testing/fake-event-source';
 import { NightPage } from './night-page';
 
 const RIG = '11111111-1111-4111-8111-111111111111';
@@ -146,6 +154,8 @@ const NIGHT: Night = {
   ],
 };
 
+const NOTHING_BY_HAND = { importId: IMPORT, stretches: [], history: [] };
+
 /** Two frames, none set aside, in the contract's binary form. */
 function series(): ArrayBuffer {
   const floats = Float32Array.of(0, 2, 0.1, -0.1, 0.2, -0.2, 0, 0);
@@ -172,14 +182,18 @@ async function renderNight(night: Night = NIGHT) {
     expect(asked).toHaveLength(2);
     for (const request of asked) request.flush(series());
   });
+  http.expectOne(byHandPaths.of(RIG, idOf(2))).flush(NOTHING_BY_HAND);
   await fixture.whenStable();
   const page = fixture.nativeElement as HTMLElement;
   const plate = (name: string) =>
     page.querySelector(`app-${name}-plate`)!.textContent.replace(/\s+/g, ' ');
-  return { fixture, page, plate };
+  return { fixture, http, page, plate };
 }
 
 describe('NightPage', () => {
+  beforeEach(() => vi.stubGlobal('EventSource', FakeEventSource));
+  afterEach(() => vi.unstubAllGlobals());
+
   it('opens with the sentence of the night and shows its run with the most frames', async () => {
     const { page, plate } = await renderNight();
     expect(page.querySelector('h1')?.textContent.replace(/\s+/g, ' ').trim()).toBe(
@@ -210,11 +224,13 @@ describe('NightPage', () => {
   });
 
   it('lets all figures follow the run that is chosen', async () => {
-    const { fixture, page, plate } = await renderNight();
+    const { fixture, http, page, plate } = await renderNight();
     const button = [...page.querySelectorAll<HTMLElement>('app-run-table button')].find(
       (each) => each.textContent.trim() === 'M 33',
     )!;
     button.click();
+    TestBed.tick();
+    http.expectOne(byHandPaths.of(RIG, idOf(1))).flush(NOTHING_BY_HAND);
     await fixture.whenStable();
     expect(button.getAttribute('aria-pressed')).toBe('true');
     for (const name of ['star', 'budget', 'trace', 'spectrum', 'worm', 'mount']) {
@@ -231,8 +247,11 @@ describe('NightPage', () => {
       a.getAttribute('href'),
     );
     expect(links).toEqual([
+      `/api/v1/rigs/${RIG}/nights/${DATE}/archive`,
       `/api/v1/rigs/${RIG}/imports/${IMPORT}/original`,
+      `/api/v1/rigs/${RIG}/imports/${IMPORT}/frames`,
       `/api/v1/rigs/${RIG}/imports/${IMPORT}/document`,
+      `/rigs/${RIG}/import/${IMPORT}`,
     ]);
   });
 

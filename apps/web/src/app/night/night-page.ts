@@ -18,11 +18,14 @@ import { Emphasis } from '../page/emphasis';
 import { Failure } from '../page/failure';
 import { Waiting } from '../page/waiting';
 import { BudgetPlate } from './budget-plate';
+import { ByHandPlate } from './by-hand-plate';
 import { MountPlate } from './mount-plate';
+import { NightLogs } from './night-logs';
 import { NightPlate } from './night-plate';
 import { NotesOf } from './notes-of';
 import { ReadingPlate } from './reading-plate';
-import { leadingRun, runTitle, shownRuns } from './shown-run';
+import { Recomputing } from './recomputing';
+import { leadingRun, runTitle, shownRuns, type ShownRun } from './shown-run';
 import { SpectrumPlate } from './spectrum-plate';
 import { StarPlate } from './star-plate';
 import { Tally } from './tally';
@@ -35,12 +38,14 @@ import { WormPlate } from './worm-plate';
   selector: 'app-night-page',
   imports: [
     BudgetPlate,
+    ByHandPlate,
     Emphasis,
     Failure,
     MountPlate,
     NightPlate,
     NotesOf,
     ReadingPlate,
+    Recomputing,
     RouterLink,
     SpectrumPlate,
     StarPlate,
@@ -49,6 +54,7 @@ import { WormPlate } from './worm-plate';
     Waiting,
     WormPlate,
   ],
+  providers: [NightLogs],
   templateUrl: './night-page.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { class: 'ruled' },
@@ -70,9 +76,12 @@ export class NightPage {
       : null,
   );
   protected readonly runs = computed(() => shownRuns(this.night()?.runs ?? []));
-  private readonly chosenId = linkedSignal<string | null>(
-    () => leadingRun(this.runs())?.id ?? null,
-  );
+  /** Stays through figures that are computed anew. */
+  private readonly chosenId = linkedSignal<readonly ShownRun[], string | null>({
+    source: this.runs,
+    computation: (runs, before) =>
+      (runs.find(({ id }) => id === before?.value) ?? leadingRun(runs))?.id ?? null,
+  });
   protected readonly run = computed(() => this.runs().find((run) => run.id === this.chosenId()));
   protected readonly runTitle = computed(() => {
     const run = this.run();
@@ -125,6 +134,13 @@ export class NightPage {
   protected readonly stretchOf = computed(() =>
     this.stretches.hasValue() ? this.stretches.value() : new Map<string, never>(),
   );
+
+  protected readonly maySetAside = inject(RigsApi).mayEdit(this.rigId);
+  /** A stretch of the chosen run. */
+  protected readonly selection = linkedSignal<string | null, SecondsRange | null>({
+    source: this.chosenId,
+    computation: () => null,
+  });
 
   private readonly wanted = signal<StretchRequest | undefined>(undefined);
   private readonly finer = this.nightsApi.stretch(this.wanted);

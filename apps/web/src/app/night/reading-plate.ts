@@ -1,7 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { importPaths, type Night } from '@stillpier/contract';
+import { RouterLink } from '@angular/router';
+import { exportPaths, type Night } from '@stillpier/contract';
 import { countedText, countText, NO_VALUE } from '../figures/measure-text';
 import type { ShownRun } from './shown-run';
+import { WaysOut } from './ways-out';
 
 const REASONS = ['dither', 'settling', 'star lost', 'by hand'] as const;
 const MOST_REFUSED_SHOWN = 20;
@@ -9,15 +11,18 @@ const MOST_REFUSED_SHOWN = 20;
 /** What was read, what was refused and what was set aside. */
 @Component({
   selector: 'app-reading-plate',
+  imports: [RouterLink, WaysOut],
   templateUrl: './reading-plate.html',
   styleUrl: './reading-plate.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReadingPlate {
   readonly rigId = input.required<string>();
+  readonly date = input.required<string>();
   readonly logs = input.required<Night['logs']>();
   readonly runs = input.required<readonly ShownRun[]>();
 
+  protected readonly archive = computed(() => exportPaths.night(this.rigId(), this.date()));
   protected readonly files = computed(() =>
     this.logs().map(({ importId, fileName, analysisVersion, reading }) => ({
       importId,
@@ -33,8 +38,6 @@ export class ReadingPlate {
       })),
       further: reading.refusedCount - Math.min(reading.refused.length, MOST_REFUSED_SHOWN),
       warnings: reading.warnings,
-      original: importPaths.original(this.rigId(), importId),
-      document: importPaths.document(this.rigId(), importId),
     })),
   );
   protected readonly refusing = computed(() =>

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, model, output } from '@angular/core';
 import type { RunStretch } from '../api/run-stretch';
 import { arcsecText, countText } from '../figures/measure-text';
 import { TraceChart } from '../figures/trace-chart/trace-chart';
@@ -24,6 +24,8 @@ export class TracePlate {
   readonly error = input.required<unknown>();
   readonly detail = input.required<RunStretch | null>();
   readonly halfRangeArcsec = input.required<number>();
+  readonly maySelect = input.required<boolean>();
+  readonly selection = model.required<SecondsRange | null>();
   readonly choose = output<string>();
   readonly stretchWanted = output<SecondsRange>();
   readonly retry = output();

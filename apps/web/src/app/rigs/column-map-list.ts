@@ -29,6 +29,11 @@ export class ColumnMapList {
     return `${roles.filter((role) => role !== 'ignore').length} of ${roles.length} columns used`;
   }
 
+  protected headerOf({ headerCells }: SavedColumnMap): string {
+    if (headerCells === null) return 'every header with the columns that it names';
+    return headerCells.join(', ') || 'files without a header';
+  }
+
   protected async remove(map: SavedColumnMap): Promise<void> {
     const sure = await this.questions.ask({
       title: `Delete the column map ${map.name}?`,

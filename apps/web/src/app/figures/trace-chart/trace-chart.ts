@@ -6,6 +6,7 @@ import {
   inject,
   input,
   linkedSignal,
+  model,
   output,
   signal,
 } from '@angular/core';
@@ -17,6 +18,7 @@ import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { countText, secondsText, signedArcsecText } from '../measure-text';
 import { ReadingLine } from '../reading-line/reading-line';
 import { TokenColours } from '../token-colours';
+import { StretchSelection } from './stretch-selection';
 import { traceColumns } from './trace-columns';
 import { BOTTOM_PX, HEIGHT_PX, LEFT_PX, RIGHT_PX, traceContent, traceFrame } from './trace-options';
 import {
@@ -45,7 +47,7 @@ interface DataZoomEvent {
 /** Guide error of a run over time: RA above Dec on one scale, from the whole run down to single frames. */
 @Component({
   selector: 'app-trace-chart',
-  imports: [FigureTable, NgxEchartsDirective, ReadingLine],
+  imports: [FigureTable, NgxEchartsDirective, ReadingLine, StretchSelection],
   providers: [provideEchartsCore({ echarts: { init } })],
   templateUrl: './trace-chart.html',
   styleUrl: './trace-chart.scss',
@@ -68,12 +70,17 @@ export class TraceChart {
   /** The same for all runs that are compared. */
   readonly halfRangeArcsec = input.required<number>();
   readonly stretchWanted = output<SecondsRange>();
+  /** Whether a stretch of the run may be selected. */
+  readonly maySelect = input(false);
+  readonly selection = model<SecondsRange | null>(null);
+  protected readonly selecting = signal(false);
 
   private readonly elementPx = elementWidthPx(920);
   protected readonly widthPx = computed(() => Math.max(NARROWEST_PX, this.elementPx()));
-  private readonly plotPx = computed(() => this.widthPx() - LEFT_PX - RIGHT_PX);
+  protected readonly plotPx = computed(() => this.widthPx() - LEFT_PX - RIGHT_PX);
   protected readonly heightPx = HEIGHT_PX;
   protected readonly bottomPx = BOTTOM_PX;
+  protected readonly leftPx = LEFT_PX;
 
   protected readonly sight = linkedSignal<SecondsRange>(() => ({
     fromSeconds: 0,
