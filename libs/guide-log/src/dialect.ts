@@ -43,8 +43,8 @@ interface Candidate {
  * Delimiter, decimal sign and header line of a log.
  *
  * A delimiter under which a line has two known names wins; else the one under which most lines have the same number of
- * columns and most of their cells are figures. The header is the line with the most known names, else the last line of
- * text above the first figures.
+ * columns and most of their cells are figures. The header is the line with the most known names above the first figures
+ * that have a known header (a later run may have a header of its own), else the last line of text above the first figures.
  *
  * @param head The first lines of the file, whole ones.
  * @throws {GuideLogError} `one-column`, `header-line-missing`.
@@ -128,12 +128,28 @@ function findHeader(candidate: Candidate, map: ColumnMap): HeadRow | undefined {
     );
   }
   if (candidate.mostKnownNames >= KNOWN_NAMES_OF_A_HEADER) {
-    return rows.find((row) => row.knownNames === candidate.mostKnownNames);
+    return firstKnownHeader(candidate);
   }
   const isTable = (row: HeadRow) => !row.isComment && row.cells.length === usualColumns;
   const firstFigures = rows.findIndex((row) => isTable(row) && row.figures >= 0.5);
   const above = firstFigures === -1 ? rows : rows.slice(0, firstFigures);
   return above.filter((row) => isTable(row) && row.figures === 0).at(-1);
+}
+
+function firstKnownHeader({ rows }: Candidate): HeadRow | undefined {
+  let best: HeadRow | undefined;
+  for (const row of rows) {
+    const isHeader = row.knownNames >= KNOWN_NAMES_OF_A_HEADER;
+    if (isHeader && row.knownNames > (best?.knownNames ?? 0)) best = row;
+    if (best && isRowOfFigures(row.cells)) break;
+  }
+  return best;
+}
+
+/** Three cells or more, and half of them figures: a line of a table, above the header or below it. */
+export function isRowOfFigures(cells: readonly string[]): boolean {
+  const filled = cells.map((cell) => cell.trim()).filter((cell) => cell !== '');
+  return filled.length >= 3 && filled.filter(isFigure).length * 2 >= filled.length;
 }
 
 /** The header's columns; one more or less where a delimiter ends every line, but not the header, or the reverse. */

@@ -5,12 +5,13 @@ import {
   type DateOrder,
   type TimeUnit,
 } from './column-map';
-import { type ColumnPlan, hasCameraErrors } from './column-plan';
+import { type ColumnPlan } from './column-plan';
 import { pierSideCode } from './direction';
 import { GrowingCodes, GrowingNumbers } from './growing-arrays';
 import { type LogFrames } from './guide-log';
 import { NameColumn } from './name-column';
 import { NumberColumns, quoted } from './number-columns';
+import { hasCameraErrors } from './plan-check';
 import { StateColumn } from './state-column';
 import { declinationsOf, hourAnglesOf } from './target-place';
 import { TimeAxis } from './time-axis';

@@ -1,7 +1,8 @@
 import { type ColumnMap } from './column-map';
-import { type ColumnPlan, planColumns, requiredRoles, ROLE_NAMES } from './column-plan';
+import { type ColumnPlan, planColumns, ROLE_NAMES } from './column-plan';
 import { type Dialect, isFigure, KNOWN_NAMES_OF_A_HEADER, knownNames } from './dialect';
 import { GuideLogError } from './guide-log-error';
+import { requiredRoles } from './plan-check';
 
 /** A header further down in the file, for the run below it. */
 export interface LaterHeader {

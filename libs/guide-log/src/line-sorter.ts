@@ -1,6 +1,6 @@
 import { type ColumnMap } from './column-map';
 import { type ColumnPlan } from './column-plan';
-import { type Dialect } from './dialect';
+import { type Dialect, isRowOfFigures } from './dialect';
 import { type FrameBuilder } from './frame-builder';
 import { type LineCounts } from './guide-log';
 import { GuideLogError } from './guide-log-error';
@@ -45,6 +45,7 @@ export class LineSorter {
       if (line === dialect.headerLine) this.#header += span;
       else if (isBlank(cells)) this.#blank += span;
       else if (first.trimStart().startsWith(dialect.comment)) this.#comment += span;
+      else if (isRowOfFigures(cells)) this.#refuse(line, span, 'the line stands above the header');
       else this.#header += span;
       return;
     }

@@ -1,5 +1,4 @@
 import { type ColumnMap } from './column-map';
-import { checkPlan } from './column-plan';
 import { DecodedText } from './decoded-text';
 import { HEAD_BYTES, decodeHead, understandHead, type UnderstoodHead } from './file-head';
 import { FrameBuilder, type InstantOfLocalTime } from './frame-builder';
@@ -7,6 +6,7 @@ import { type GuideLog, type LineCounts } from './guide-log';
 import { GuideLogError } from './guide-log-error';
 import { LineEnds } from './line-ends';
 import { LineSorter } from './line-sorter';
+import { checkPlan } from './plan-check';
 import { RowSplitter } from './row-splitter';
 
 /** Reads go in pieces of this size: larger ones are slower, since their rows outlive the young generation. */

@@ -1,9 +1,10 @@
 import { CameraAxes } from './camera-axes';
 import { type ColumnMap, type ColumnRole } from './column-map';
-import { type ColumnPlan, hasCameraErrors, ROLE_NAMES } from './column-plan';
+import { type ColumnPlan, ROLE_NAMES } from './column-plan';
 import { correctionWithSign } from './direction';
 import { GrowingNumbers } from './growing-arrays';
 import { isMissingCell, readNumber } from './number-cell';
+import { hasCameraErrors } from './plan-check';
 import { SentinelCells } from './sentinel-cells';
 
 /** RA and Dec error stand first: the camera's axes are turned in the first two places of a row. */

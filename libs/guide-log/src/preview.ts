@@ -1,10 +1,11 @@
 import { type ColumnMap, type ColumnRole, type ColumnUnit, type DateOrder } from './column-map';
-import { checkPlan, columnNames, type ColumnPlan } from './column-plan';
+import { columnNames, type ColumnPlan } from './column-plan';
 import { DecodedText, type Encoding } from './decoded-text';
 import { type Dialect } from './dialect';
 import { HEAD_BYTES, decodeHead, understandHead, type UnderstoodHead } from './file-head';
 import { GuideLogError } from './guide-log-error';
 import { LineEnds } from './line-ends';
+import { checkPlan } from './plan-check';
 import { RowSplitter } from './row-splitter';
 
 const PREVIEW_ROWS = 20;

@@ -69,11 +69,13 @@ export class TimeWatch {
           `From about line ${this.#offSinceLine || line} on the frames are ${rounded(step)} s apart instead of ${rounded(this.#usualStep)} s.`,
         );
       }
-      if (isFirst || isOther) this.#usualStep = step;
+      if (isFirst || isOther) {
+        this.#usualStep = step;
+        this.#offSinceLine = 0;
+      }
     }
     this.#stepCount = 0;
     this.#offCount = 0;
-    this.#offSinceLine = 0;
   }
 
   /** @param line The next frame; 0 at the end of the file. */
