@@ -140,9 +140,9 @@ function resourceRoutes(resources: ResourceParts): Router {
   const imports = new ImportService(knex);
   const uploads = new UploadService(knex, configuration.UPLOAD_LIMIT_MIB);
   const events = new ImportEvents(imports, parts.hub, streams, parts.logger);
-  const mailsShownAt = configuration.LOCAL_MAIL_URL ?? null;
+  const localMailUrl = configuration.LOCAL_MAIL_URL ?? null;
   return Router().use(
-    accountRoutes({ accounts, limits, mailsShownAt }),
+    accountRoutes({ accounts, limits, localMailUrl }),
     sessionRoutes({ accounts, authenticator, limits }),
     accessTokenRoutes(tokens),
     rigRoutes(new RigService(knex)),

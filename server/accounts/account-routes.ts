@@ -18,17 +18,17 @@ export interface AccountParts {
   readonly accounts: AccountService;
   readonly limits: Limits;
   /** Where the local mail catcher shows its mails; null when they leave the machine. */
-  readonly mailsShownAt: string | null;
+  readonly localMailUrl: string | null;
 }
 
-export function accountRoutes({ accounts, limits, mailsShownAt }: AccountParts): Router {
+export function accountRoutes({ accounts, limits, localMailUrl }: AccountParts): Router {
   const router = Router();
 
   router.post(accountPaths.accounts, async (req, res) => {
     const signUp = readRequest(signUpSchema, req.body);
     await takeMail(limits, req, signUp.email);
     await accounts.signUp(signUp);
-    res.status(202).json(mailSent(mailsShownAt));
+    res.status(202).json(mailSent(localMailUrl));
   });
   router.post(accountPaths.confirmations, async (req, res) => {
     const { token } = readRequest(confirmAccountSchema, req.body);
@@ -56,7 +56,7 @@ export function accountRoutes({ accounts, limits, mailsShownAt }: AccountParts):
     const { email } = readRequest(requestPasswordResetSchema, req.body);
     await takeMail(limits, req, email);
     await accounts.requestPasswordReset(email);
-    res.status(202).json(mailSent(mailsShownAt));
+    res.status(202).json(mailSent(localMailUrl));
   });
   router.put(accountPaths.passwordResets, async (req, res) => {
     const { token, password } = readRequest(resetPasswordSchema, req.body);
@@ -72,9 +72,6 @@ async function takeMail(limits: Limits, req: Request, email: string): Promise<vo
   await limits.take('mailByEmail', email);
 }
 
-function mailSent(mailsShownAt: string | null): MailSent {
-  const message = 'An e-mail is on its way: open the link in it.';
-  return mailsShownAt === null
-    ? { message }
-    : { message: `${message} This installation keeps its e-mails at ${mailsShownAt}` };
+function mailSent(localMailUrl: string | null): MailSent {
+  return { message: 'An e-mail is on its way: open the link in it.', localMailUrl };
 }

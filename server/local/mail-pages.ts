@@ -103,7 +103,7 @@ function writePage(title: string, content: Markup): string {
       </head>
       <body>
         <header><h1>${title}</h1></header>
-        ${content}
+        <main>${content}</main>
       </body>
     </html>`.text;
 }

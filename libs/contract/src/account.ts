@@ -31,7 +31,15 @@ export const signUpSchema = z.strictObject({
 export type SignUp = z.input<typeof signUpSchema>;
 
 /** Answered alike whether the address is known or not. */
-export const mailSentSchema = z.strictObject({ message: z.string() }).meta({ id: 'MailSent' });
+export const mailSentSchema = z
+  .strictObject({
+    message: z.string(),
+    localMailUrl: z
+      .url()
+      .nullable()
+      .describe('Where this installation shows its e-mails; null when they leave the machine'),
+  })
+  .meta({ id: 'MailSent' });
 export type MailSent = z.infer<typeof mailSentSchema>;
 
 const mailTokenSchema = z.string().min(20).max(100).describe('From the link in the e-mail');

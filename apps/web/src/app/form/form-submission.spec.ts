@@ -32,6 +32,16 @@ describe('the submission of a form', () => {
     expect(submission.message()).toContain('one field');
   });
 
+  it('withdraws its sentence once every refused field has another value', async () => {
+    const [form, submission] = [emptyForm(), new FormSubmission()];
+    await submission.send(form, schema, vi.fn());
+    expect(submission.message()).toContain('2 fields');
+    form.patchValue({ name: 'North pier' });
+    expect(submission.message()).toContain('2 fields');
+    form.patchValue({ site: { latitude: 47 } });
+    expect(submission.message()).toBeNull();
+  });
+
   it('shows what the server refused at the field that its path names', async () => {
     const [form, submission] = [filledForm(), new FormSubmission()];
     const errors = [{ path: 'site.latitude', message: 'is not on land' }];

@@ -1,5 +1,6 @@
 import { signal } from '@angular/core';
 import { FormControl, type FormGroup } from '@angular/forms';
+import { filter, Subscription, take } from 'rxjs';
 import type * as z from 'zod';
 import { type FieldFault, ProblemError, sentenceOf } from '../api/problem-error';
 
@@ -14,6 +15,7 @@ export class FormSubmission {
   readonly message = signal<string | null>(null);
   /** Whether the thing was changed by somebody else since it was loaded (status 412). */
   readonly conflict = signal(false);
+  private mending = Subscription.EMPTY;
 
   /** @returns Whether it was accepted. */
   async send<Schema extends z.ZodType>(
@@ -46,6 +48,7 @@ export class FormSubmission {
   }
 
   clear(): void {
+    this.mending.unsubscribe();
     this.message.set(null);
     this.conflict.set(false);
   }
@@ -68,6 +71,16 @@ export class FormSubmission {
       ...elsewhere.map(({ path, message }) => (path === '' ? message : `${path} ${message}`)),
     ];
     this.message.set(`${opening} ${parts.join('; ')}.`);
+    if (elsewhere.length > 0) return;
+    // Once every refused field has another value the sentence would no longer be true.
+    this.mending = form.statusChanges
+      .pipe(
+        filter((status) => status === 'VALID'),
+        take(1),
+      )
+      .subscribe(() => {
+        this.clear();
+      });
   }
 }
 

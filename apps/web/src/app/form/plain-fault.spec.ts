@@ -12,6 +12,7 @@ describe('what zod found, in plain words', () => {
     ['a small number', z.number().min(10), 9, 'needs at least 10'],
     ['a number that must be above', z.number().positive(), 0, 'needs more than 0'],
     ['a large number', z.number().max(8), 9, 'needs at most 8'],
+    ['an empty text', z.string().min(1), '', 'is needed'],
     ['a short text', z.string().min(10), 'x', 'needs at least 10 characters'],
     ['a long list', z.array(z.int()).max(1), [1, 2], 'needs at most 1 entries'],
     ['none of the choices', z.enum(['a']), 'b', 'needs one of the choices'],

@@ -7,6 +7,7 @@ export function plainFault(issue: z.core.$ZodRawIssue): string {
     return issue.expected === 'int' ? 'needs a whole number' : `needs a ${issue.expected}`;
   }
   if (issue.code === 'too_small') {
+    if (issue.origin === 'string' && issue.minimum === 1) return 'is needed';
     const words = issue.inclusive === false ? 'more than' : 'at least';
     return `needs ${words} ${issue.minimum}${countedIn(issue.origin)}`;
   }

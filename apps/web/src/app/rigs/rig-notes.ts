@@ -10,6 +10,9 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
         With its teeth or its period the analysis tells periodic error from everything else, and
         folds the night on the turn of the worm.
       </p>
+      <p>
+        A mount without a worm repeats too: enter its wave generator or its roller as a gear stage.
+      </p>
     </div>
     <div class="note">
       <h3>The guide rate</h3>

@@ -31,7 +31,9 @@ describe('the page that confirms an address', () => {
   });
 
   it('says when the link is cut short', async () => {
-    const shown = await open('/confirm');
-    expect(shown.page.textContent).toContain('This link is not whole');
+    for (const address of ['/confirm', '/confirm#token=cut-short']) {
+      const shown = await open(address);
+      expect(shown.page.textContent).toContain('This link is not whole');
+    }
   });
 });

@@ -2,23 +2,33 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { requestPasswordResetSchema } from '@stillpier/contract';
+import { type MailSent, requestPasswordResetSchema } from '@stillpier/contract';
 import { AccountsApi } from '../api/accounts-api';
 import { Field } from '../form/field';
 import { FieldInput } from '../form/field-input';
 import { FormMessage } from '../form/form-message';
 import { FormSubmission } from '../form/form-submission';
 import { FrontPage } from './front-page';
+import { MailOnItsWay } from './mail-on-its-way';
 
 @Component({
   selector: 'app-forgot-password-page',
-  imports: [Field, FieldInput, FormMessage, FrontPage, MatButton, ReactiveFormsModule, RouterLink],
+  imports: [
+    Field,
+    FieldInput,
+    FormMessage,
+    FrontPage,
+    MailOnItsWay,
+    MatButton,
+    ReactiveFormsModule,
+    RouterLink,
+  ],
   template: `
     <app-front-page>
-      @if (sent(); as message) {
+      @if (sent(); as answer) {
         <div class="stack" role="status">
           <h1 class="form-title">Now look at your mail</h1>
-          <p>{{ message }}</p>
+          <app-mail-on-its-way [sent]="answer" />
           <p class="small apart"><a routerLink="/sign-in">Back to sign in</a></p>
         </div>
       } @else {
@@ -44,11 +54,11 @@ export class ForgotPasswordPage {
 
   protected readonly submission = new FormSubmission();
   protected readonly form = inject(NonNullableFormBuilder).group({ email: '' });
-  protected readonly sent = signal<string | null>(null);
+  protected readonly sent = signal<MailSent | null>(null);
 
   protected async request(): Promise<void> {
     await this.submission.send(this.form, requestPasswordResetSchema, async (body) => {
-      this.sent.set((await this.accounts.requestPasswordReset(body)).message);
+      this.sent.set(await this.accounts.requestPasswordReset(body));
     });
   }
 }

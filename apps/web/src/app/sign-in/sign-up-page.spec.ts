@@ -10,11 +10,15 @@ describe('the page that makes an account', () => {
     shown.type('Password', 'a long pass phrase');
     shown.press('Make the account');
     await shown.settle();
-    shown.http.expectOne(accountPaths.accounts).flush({ message: 'A mail is on its way.' });
+    shown.http.expectOne(accountPaths.accounts).flush({
+      message: 'A mail is on its way.',
+      localMailUrl: 'http://127.0.0.1:1080',
+    });
     await shown.settle();
-    const status = shown.page.querySelector('[role=status]')?.textContent;
-    expect(status).toContain('A mail is on its way.');
-    expect(status).toContain('ilse.varga@example.org');
+    const status = shown.page.querySelector('[role=status]');
+    expect(status?.textContent).toContain('A mail is on its way.');
+    expect(status?.textContent).toContain('ilse.varga@example.org');
+    expect(status?.querySelector('a')?.getAttribute('href')).toBe('http://127.0.0.1:1080');
   });
 
   it('refuses a short password at its field', async () => {
