@@ -7,6 +7,12 @@ export interface Cluster {
   readonly stop: () => void;
 }
 
+export function startCluster(options: {
+  readonly base: string;
+  readonly programs: PostgresPrograms;
+  readonly throwaway?: boolean;
+}): Promise<Cluster>;
+
 export function startThrowawayCluster(
   programs: PostgresPrograms,
   localFolder: string,

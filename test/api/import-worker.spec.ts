@@ -12,8 +12,8 @@ import { ImportTurn, TakenOverError } from '../../server/jobs/import-turn';
 import { makeApp, type TestApp } from '../support/api-app';
 import { EXAMPLE_SETUP, guideCsv } from '../support/example-rig';
 import { type Cast, castOf } from '../support/rig-members';
+import { startServerProcess } from '../support/server-process';
 import { finished, startTestWorker, type TestWorker, upload } from '../support/test-worker';
-import { startWorkerProcess } from '../support/worker-process';
 
 /** Long enough to be stopped in the middle. */
 const MANY_FRAMES = 60_000;
@@ -45,7 +45,7 @@ const jobsOf = (id: string) =>
 
 describe('a worker that is killed in the middle of an import', () => {
   it('is followed by the next one, which finishes it with nothing counted twice', async () => {
-    const killed = await startWorkerProcess(app);
+    const killed = await startServerProcess('worker', app.databaseUrl);
     const { id } = await send(1, MANY_FRAMES);
     await untilRunning(id);
     await killed.kill();

@@ -13,7 +13,7 @@ import { NotifyHub } from '../../server/database/notify-hub';
 import { type Allowances, STANDARD_ALLOWANCES } from '../../server/http/limits';
 import { SEND_MAIL_TASK } from '../../server/mail/mail-queue';
 import { type OutgoingMail, sendMailTask } from '../../server/mail/send-mail-task';
-import { createTestDatabase } from './test-database';
+import { createTestDatabase, type TestDatabase } from './test-database';
 
 export const PUBLIC_URL = 'http://stillpier.test';
 export const PASSWORD = 'a quiet pier at night';
@@ -48,11 +48,13 @@ export interface TestAppOptions {
   readonly webFolder?: string;
   readonly logger?: Log;
   readonly uploadLimitMib?: number;
+  /** In place of a new database on the cluster of the run. */
+  readonly database?: TestDatabase;
 }
 
 /** The real application on a database of its own, listening on a free port of loopback. */
 export async function makeApp(options: TestAppOptions = {}): Promise<TestApp> {
-  const database = await createTestDatabase();
+  const database = options.database ?? (await createTestDatabase());
   const knex = makeKnex(database.url, 5);
   const pool = makePool(database.url, 3);
   const hub = new NotifyHub(database.url, 'imports');
