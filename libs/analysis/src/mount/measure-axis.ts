@@ -151,6 +151,7 @@ function withMotion(
       ...known,
       uncorrectedArcsec: motion,
       smoothArcsec: model.smooth,
+      driftArcsec: model.drift,
       periodicErrorArcsec: model.periodic,
       lines: model.lines.map(lineOf),
       noiseArcsec: floorArcsec,

@@ -27,7 +27,7 @@ describe('the motion fit', () => {
         0.5 * Math.cos((2 * Math.PI * t) / 37.31) +
         air[n]!,
     );
-    const { lines, driftPerSecond, driftStandardError, noise: sigma } = fitted(series);
+    const { lines, trend, driftStandardError, noise: sigma } = fitted(series);
     expect(lines).toHaveLength(2);
     const [slow, fast] = lines;
     // Errors of a sine in white noise: amplitude σ·√(2/N) = 0.017, period below 0.01 %; four of these.
@@ -36,7 +36,7 @@ describe('the motion fit', () => {
     expect(Math.abs(Math.atan2(-slow!.sine, slow!.cosine) - 1)).toBeLessThan(0.02);
     expect(Math.abs(fast!.amplitude - 0.5)).toBeLessThan(0.07);
     expect(Math.abs(1 / fast!.frequency - 37.31)).toBeLessThan(0.02);
-    expect(Math.abs(driftPerSecond - 0.002)).toBeLessThan(4 * driftStandardError);
+    expect(Math.abs(trend[0]! - 0.002)).toBeLessThan(4 * driftStandardError);
     expect(Math.abs(sigma - 0.5)).toBeLessThan(0.034); // σ/√(2N) = 0.0083; four of these
   });
 
@@ -48,10 +48,10 @@ describe('the motion fit', () => {
 
   it('leaves a spike out and lets the level start anew at a step', () => {
     const series = noise(3).map((value, n) => value + (n === 700 ? 9 : 0) + (n >= 1200 ? 5 : 0));
-    const { frames: after, driftPerSecond, driftStandardError } = fitted(series);
+    const { frames: after, trend, driftStandardError } = fitted(series);
     expect(after.used[700]).toBe(0);
     expect(after.restartFrames).toEqual([1200]);
-    expect(Math.abs(driftPerSecond)).toBeLessThan(4 * driftStandardError);
+    expect(Math.abs(trend[0]!)).toBeLessThan(4 * driftStandardError);
   });
 
   it('tells the response inside a closed loop, where plain regression is far off', () => {

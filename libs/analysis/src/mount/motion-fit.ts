@@ -2,6 +2,7 @@ import { withoutBumps } from './bumps-and-steps';
 import { innovationLines } from './innovation-lines';
 import { likeliestWalk } from './likeliest-walk';
 import { type FittedLine, lineColumns, lineFrom, newLine } from './motion-line';
+import { skyTrend } from './sky-trend';
 import {
   addScaled,
   type LevelFrames,
@@ -28,7 +29,9 @@ export interface MotionFit {
   /** One a command, and their covariance, row after row. */
   readonly coefficients: Float64Array;
   readonly covariance: Float64Array;
-  readonly driftPerSecond: number;
+  /** Of the columns of `skyTrend`; the first is the mean drift, arcsec per second. */
+  readonly trend: Float64Array;
+  /** Of the mean drift. */
   readonly driftStandardError: number;
   /** Strongest first. */
   readonly lines: readonly FittedLine[];
@@ -52,7 +55,7 @@ const MOST_WALK_VARIANCE = 4;
 /**
  * One-step prediction-error fit of the motion of one axis (SCIENCE 4):
  *
- *     e[n] = Σ sᵢ·cᵢ[n] + drift·t + significant lines + wandering level + white noise,
+ *     e[n] = Σ sᵢ·cᵢ[n] + drift (`skyTrend`) + significant lines + wandering level + white noise,
  *
  * which in first differences reads Δe = s·Δc + lines + (1 − θB)ε. The lines are found in the innovations, strongest first,
  * and their periods refined together with all else; the wandering follows by likelihood. A correction is a function of
@@ -64,13 +67,15 @@ const MOST_WALK_VARIANCE = 4;
 export function fitMotion(input: MotionFitInput): MotionFit {
   const { series, commands } = input;
   const span = (input.frames.timeSeconds.at(-1) ?? 0) - (input.frames.timeSeconds[0] ?? 0);
+  const trend = skyTrend(input.frames.timeSeconds);
+  const known = [...commands, ...trend];
   let frames = input.frames;
   let lines: readonly FittedLine[] = input.startLines;
   for (let pass = 1; ; pass++) {
-    const { columns, places } = designMatrix(frames, commands, lines);
+    const { columns, places } = designMatrix(frames, known, lines);
     // How the rest wanders hardly depends on the last digits of the frequencies: their columns are left out.
     const plainLines = lines.map((line) => newLine(line.frequency));
-    const plain = designMatrix(frames, commands, plainLines).columns;
+    const plain = designMatrix(frames, known, plainLines).columns;
     const walkPerSecond = likeliestWalk(frames, plain, series);
     const fit = whitenedLeastSquares(frames, walkPerSecond, columns, series);
     const refined = lines.map((line, i) => lineFrom(line, fit, places[i] ?? 0, span));
@@ -91,7 +96,8 @@ export function fitMotion(input: MotionFitInput): MotionFit {
       found.length === 0 && !moved && !unrefined && credible.length === refined.length;
     if ((settled && calm === frames) || pass >= MOST_PASSES) {
       const solve = (walk: number) => whitenedLeastSquares(frames, walk, columns, series);
-      return described(frames, walkPerSecond, fit, commands.length, lines, solve);
+      const sizes = { commands: commands.length, trendColumns: trend.length };
+      return described(frames, walkPerSecond, fit, sizes, lines, solve);
     }
     frames = calm;
   }
@@ -104,13 +110,13 @@ function isCredible(line: FittedLine, span: number): boolean {
   );
 }
 
-/** Commands, drift, then the lines; `places` tells where each line's columns begin. */
+/** Commands and drift, then the lines; `places` tells where each line's columns begin. */
 function designMatrix(
   frames: LevelFrames,
-  commands: readonly Float64Array[],
+  known: readonly Float64Array[],
   lines: readonly FittedLine[],
 ) {
-  const columns = [...commands, frames.timeSeconds];
+  const columns = [...known];
   const places = lines.map((line) => {
     const place = columns.length;
     columns.push(...lineColumns(frames.timeSeconds, line));
@@ -149,7 +155,7 @@ function described(
   frames: LevelFrames,
   walkPerSecond: number,
   fit: WhitenedFit,
-  commands: number,
+  { commands, trendColumns }: { readonly commands: number; readonly trendColumns: number },
   lines: readonly FittedLine[],
   solve: (walkPerSecond: number) => WhitenedFit,
 ): MotionFit {
@@ -160,7 +166,7 @@ function described(
     noise: fit.noise,
     coefficients: fit.coefficients.slice(0, commands),
     covariance: commandCovariance(walkPerSecond, fit, commands, solve),
-    driftPerSecond: fit.coefficients[commands] ?? 0,
+    trend: fit.coefficients.slice(commands, commands + trendColumns),
     driftStandardError: Math.sqrt(fit.covariance[commands * size + commands] ?? 0),
     lines: [...lines].sort((a, b) => b.amplitude - a.amplitude),
     innovations: fit.innovations,

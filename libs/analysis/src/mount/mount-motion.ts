@@ -38,8 +38,10 @@ export interface AxisMotion {
    * Starts near zero, its level is free.
    */
   readonly uncorrectedArcsec: Float64Array | null;
-  /** Straight line, periodic error and other significant lines fitted to `uncorrectedArcsec`, at every frame. */
+  /** Drift, periodic error and other significant lines fitted to `uncorrectedArcsec`, at every frame. */
   readonly smoothArcsec: Float64Array | null;
+  /** The drift's part of it, which bends on a long run. */
+  readonly driftArcsec: Float64Array | null;
   /** RA only: the periodic error's part of `smoothArcsec`, on the sky; zeros where there is none. */
   readonly periodicErrorArcsec: Float64Array | null;
   /** All significant lines, the worm's harmonics among them, strongest first. */
@@ -58,6 +60,7 @@ export const NO_MOTION: AxisMotion = {
   displacementArcsec: null,
   uncorrectedArcsec: null,
   smoothArcsec: null,
+  driftArcsec: null,
   periodicErrorArcsec: null,
   lines: [],
   noiseArcsec: null,

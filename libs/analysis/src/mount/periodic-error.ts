@@ -1,5 +1,6 @@
 import { type MotionFit } from './motion-fit';
 import { amplitudeError, type FittedLine, lineColumns } from './motion-line';
+import { skyTrend } from './sky-trend';
 import { addScaled, whitenedLeastSquares, type WhitenedFit } from './whitened-least-squares';
 
 /** Periodic error as fitted: on the sky, before the turn into axis angles. */
@@ -11,7 +12,8 @@ export interface WormFit {
   readonly harmonics: readonly FittedLine[];
   /** Significant lines that are no harmonic of the worm, strongest first. */
   readonly otherLines: readonly FittedLine[];
-  readonly driftPerSecond: number;
+  /** As of `MotionFit`. */
+  readonly trend: Float64Array;
   readonly driftStandardError: number;
 }
 
@@ -107,13 +109,14 @@ class WormDesign {
     const orders = bestOrder(this.solve(all.columns), all.first, most);
     const { columns, others, first } = this.columns(1 / period, orders);
     const fit = this.solve(columns);
-    const otherLines = others.map((line, i) => fittedLine(line.frequency, fit, 1 + 2 * i));
+    const trend = this.motion.trend.length;
+    const otherLines = others.map((line, i) => fittedLine(line.frequency, fit, trend + 2 * i));
     return {
       harmonics: Array.from({ length: orders }, (_, k) =>
         fittedLine((k + 1) / period, fit, first + 2 * k),
       ),
       otherLines: otherLines.sort((a, b) => b.amplitude - a.amplitude),
-      driftPerSecond: fit.coefficients[0] ?? 0,
+      trend: fit.coefficients.slice(0, trend),
       driftStandardError: Math.sqrt(fit.covariance[0] ?? 0),
     };
   }
@@ -127,7 +130,7 @@ class WormDesign {
   private columns(frequency: number, orders: number) {
     const { timeSeconds } = this.motion.frames;
     const others = this.motion.lines.filter((line) => !this.isHarmonic(line, frequency));
-    const columns = [timeSeconds];
+    const columns = [...skyTrend(timeSeconds)];
     const add = (each: number) => {
       const bare = { frequency: each, cosine: 0, sine: 0, amplitude: 0, standardError: 0 };
       columns.push(...lineColumns(timeSeconds, bare));

@@ -1,11 +1,10 @@
-import { ARCSEC_PER_RADIAN } from '../optics/plate-scale';
-import { STAR_RATE_ARCSEC_PER_SECOND } from '../sky/earth-rotation';
 import { robustSigma } from '../statistics/robust-sigma';
 import { ColourFilter } from './colour-filter';
 import { type LevelWhitening } from './level-whitening';
 import { orthonormal, product, squaresWithout, without } from './orthonormal';
 import { playInto } from './play';
 import { START_LAGS, wayOf } from './play-start';
+import { skyAngle } from './sky-trend';
 
 /** Best fit of one gap width. */
 export interface ProfilePoint {
@@ -152,9 +151,7 @@ export class PlayProfile {
  * time from the middle of the run and w the star rate. On a short run they are its first three powers.
  */
 export function trendColumns(timeSeconds: Float64Array): readonly Float64Array[] {
-  const middle = ((timeSeconds[0] ?? 0) + (timeSeconds.at(-1) ?? 0)) / 2;
-  const rate = STAR_RATE_ARCSEC_PER_SECOND / ARCSEC_PER_RADIAN;
-  const angle = timeSeconds.map((time) => rate * (time - middle));
+  const angle = skyAngle(timeSeconds);
   return [
     angle,
     angle.map((each) => 1 - Math.cos(each)),

@@ -1,5 +1,4 @@
 import { type RunSeries, SET_ASIDE_CODES } from '../series/run-series';
-import { linearTrend } from '../statistics/linear-trend';
 import { bumpsOf } from './bumps';
 import { guideAgain } from './guide-again';
 import { loopLaw, type LoopLaw } from './loop-law';
@@ -59,9 +58,10 @@ export function replayableAxis(
   motion: MountMotion,
   axis: 'ra' | 'dec',
 ): ReplayableAxis | null {
-  const { commandArcsec, displacementArcsec, uncorrectedArcsec, smoothArcsec } = motion[axis];
+  const { commandArcsec, displacementArcsec, uncorrectedArcsec } = motion[axis];
+  const { smoothArcsec, driftArcsec } = motion[axis];
   if (commandArcsec === null || displacementArcsec === null) return null;
-  if (uncorrectedArcsec === null || smoothArcsec === null) return null;
+  if (uncorrectedArcsec === null || smoothArcsec === null || driftArcsec === null) return null;
   const guided = commandArcsec.some((command) => command !== 0);
   const gain = guided ? motion.loop[axis]?.gain : 0;
   if (gain === null || gain === undefined) return null;
@@ -70,11 +70,6 @@ export function replayableAxis(
   const moved = summedBefore(displacementArcsec);
   const starArcsec = error.map((value, n) => value - (moved[n] ?? 0));
   const rest = uncorrectedArcsec.map((value, n) => value - (smoothArcsec[n] ?? NaN));
-  // The document tells the drift only where both axes are known; a log may guide one alone.
-  const fitted = motion.uncorrected?.[axis].driftArcsecPerMinute;
-  const driftPerSecond =
-    fitted === undefined ? linearTrend(run.timeSeconds, smoothArcsec).slope : fitted / 60;
-  const drift = run.timeSeconds.map((time) => driftPerSecond * time);
   const { decPlay } = motion;
   const gapKnown = axis === 'dec' && 'determined' in decPlay && decPlay.determined;
   return {
@@ -83,8 +78,8 @@ export function replayableAxis(
     smoothStarArcsec: starArcsec.map((star, n) => star - (rest[n] ?? NaN)),
     gapArcsec: gapKnown ? decPlay.arcsec : 0,
     parts: {
-      drift,
-      'periodic error': smoothArcsec.map((smooth, n) => smooth - (drift[n] ?? 0)),
+      drift: driftArcsec,
+      'periodic error': smoothArcsec.map((smooth, n) => smooth - (driftArcsec[n] ?? 0)),
       'gusts and bumps': bumpsOf(rest, run.cadenceSeconds),
     },
   };

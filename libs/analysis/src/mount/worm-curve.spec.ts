@@ -33,7 +33,7 @@ describe("the worm's curve", () => {
       turns: 7.5,
       harmonics: [line(1 / 480, 3, 0)],
       otherLines: [],
-      driftPerSecond: 0,
+      trend: new Float64Array(1),
       driftStandardError: 0,
     };
     const curve = [{ phase: 0.5, medianArcsec: 1, q1Arcsec: null, q3Arcsec: 2 }];
