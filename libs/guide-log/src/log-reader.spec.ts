@@ -1,9 +1,11 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { physicalLines } from '../../../test/support/physical-lines';
 import { HEADER, utf8 } from '../../../test/support/small-guide-log';
+import { faults as spoiling, spoil } from '../../../test/support/spoil';
 import { type GuideLog } from './guide-log';
 import { GuideLogError } from './guide-log-error';
-import { createLogReader, readGuideLog } from './log-reader';
+import { createLogReader, MOST_LINES, readGuideLog } from './log-reader';
 
 /** A log with comments, quotes and states; 2,500 frames are longer than the 64 KiB that the dialect is found from. */
 function logOf(frames: number, lineEnd = '\n'): string {
@@ -13,19 +15,6 @@ function logOf(frames: number, lineEnd = '\n'): string {
     lines.push(`${n * 2},${(n % 7) / 10},-${(n % 5) / 10},guiding,"Field ""${n % 3}"""`);
   }
   return lines.join(lineEnd) + lineEnd;
-}
-
-/** Physical lines, counted byte by byte. */
-function physicalLines(bytes: Uint8Array): number {
-  let lines = 0;
-  let isOpen = false;
-  for (let at = 0; at < bytes.length; at++) {
-    const isEnd = bytes[at] === 10 || bytes[at] === 13;
-    if (bytes[at] === 13 && bytes[at + 1] === 10) at++;
-    if (isEnd) lines++;
-    isOpen = !isEnd;
-  }
-  return isOpen ? lines + 1 : lines;
 }
 
 function readOrSay(chunks: Iterable<Uint8Array>): GuideLog | string {
@@ -40,51 +29,6 @@ function readOrSay(chunks: Iterable<Uint8Array>): GuideLog | string {
 function cutAt(bytes: Uint8Array, cuts: readonly number[]): Uint8Array[] {
   const places = cuts.map((cut) => cut % (bytes.length + 1)).sort((a, b) => a - b);
   return [...places, bytes.length].map((end, i) => bytes.subarray(places[i - 1] ?? 0, end));
-}
-
-const spoiling = fc.array(
-  fc.record({
-    at: fc.nat(),
-    remove: fc.oneof(fc.constant(0), fc.nat({ max: 3 }), fc.nat({ max: 400 })),
-    insert: fc.oneof(
-      fc.constantFrom(
-        '"',
-        ',',
-        '\n',
-        '\r',
-        '\r\n',
-        '""',
-        '#',
-        ';',
-        '\0',
-        'é',
-        '\uFEFF',
-        ' ',
-        'nan',
-        '-',
-      ),
-      fc.string({ maxLength: 6 }),
-    ),
-    rawByte: fc.option(fc.integer({ min: 0x80, max: 0xff })),
-  }),
-  { minLength: 1, maxLength: 12 },
-);
-
-/** The log with bytes taken out and put in; its first bytes stay, so that no byte order mark arises there. */
-function spoil(
-  bytes: Uint8Array,
-  faults: typeof spoiling extends fc.Arbitrary<infer T> ? T : never,
-) {
-  return faults.reduce((log, { at, remove, insert, rawByte }) => {
-    const place = 8 + (at % (log.length - 8));
-    const put = [...utf8(insert), ...(rawByte === null ? [] : [rawByte])];
-    const rest = log.subarray(place + remove);
-    const spoiled = new Uint8Array(place + put.length + rest.length);
-    spoiled.set(log.subarray(0, place));
-    spoiled.set(put, place);
-    spoiled.set(rest, place + put.length);
-    return spoiled;
-  }, bytes);
 }
 
 const short = fc.constantFrom('\n', '\r\n', '\r').map((lineEnd) => utf8(logOf(40, lineEnd)));
@@ -157,6 +101,27 @@ describe('the reader of guide logs', () => {
     expect(reading.refusedCount).toBe(300);
     expect(reading.refused).toHaveLength(200);
     expect(reading.refused.at(-1)).toMatchObject({ line: 202 });
+  });
+
+  it('refuses a file of more lines than it may have, as soon as they are seen', () => {
+    const lines = `${HEADER}\n0,1,2\n1,1,2\n`;
+    expect(readGuideLog(utf8(lines), { mostLines: 3 }).reading.lines).toBe(3);
+    const sentence =
+      'The file has more than 1,234 lines, the most that are read of one file: cut it into several.';
+    const reader = createLogReader({ mostLines: 1234 });
+    const long = utf8(logOf(9000));
+    expect(() => reader.push(long)).toThrow(
+      expect.objectContaining({ fault: 'too-many-lines', message: sentence }),
+    );
+    expect(MOST_LINES).toBe(2_000_000); // the limit that the project has set itself
+  });
+
+  it('keeps a log whose file ends in zeros or other bytes that are no text', () => {
+    const { reading } = readGuideLog(utf8(`${logOf(40)}${'\0'.repeat(5000)}`));
+    expect(reading.frames).toBe(40);
+    expect(reading.refused).toEqual([{ line: 45, reason: 'the line has 1 column instead of 5' }]);
+    const cut = readGuideLog(utf8(`${logOf(40)}80,0.1,-0.\n\x1A`));
+    expect(cut.reading).toMatchObject({ frames: 40, refusedCount: 2 });
   });
 
   it('gives every column the same length and keeps gaps as NaN', () => {
