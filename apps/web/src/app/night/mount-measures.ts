@@ -1,4 +1,4 @@
-import type { Run } from '@stillpier/contract';
+import type { Finding, Run } from '@stillpier/contract';
 import {
   arcminText,
   arcsecText,
@@ -14,21 +14,25 @@ export interface MountMeasure {
   readonly ra: string;
   readonly dec: string;
   readonly note: string;
+  /** What findings may say of it. */
+  readonly findings: readonly Finding['code'][];
 }
 
 /** What the run tells of the mount beside its periodic error. */
 export function mountMeasures(run: Run): MountMeasure[] {
   return [
-    drift(run),
-    polarAlignment(run),
-    uncorrected(run),
-    backlash(run),
-    response(run),
-    asymmetry(run),
-    gain(run),
-    seeingFloor(run),
+    { ...drift(run), findings: ['drift'] },
+    { ...polarAlignment(run), findings: ['polar-alignment'] },
+    { ...uncorrected(run), findings: [] },
+    { ...backlash(run), findings: ['backlash', 'stiction'] },
+    { ...response(run), findings: ['response-off'] },
+    { ...asymmetry(run), findings: ['response-asymmetry'] },
+    { ...gain(run), findings: [] },
+    { ...seeingFloor(run), findings: [] },
   ];
 }
+
+type Told = Omit<MountMeasure, 'findings'>;
 
 const missing = (run: Run, key: string): string =>
   run.whyMissing[key] ?? 'Cannot be told from this run.';
@@ -40,7 +44,7 @@ function perMinute(arcsecPerMinute: number, error: number): string {
   return `${smallText(arcsecPerMinute)}″ ± ${smallText(error)}″ per min`;
 }
 
-function drift(run: Run): MountMeasure {
+function drift(run: Run): Told {
   const { uncorrected, ra, dec } = run;
   const left = (axis: typeof ra): string =>
     either(axis, (a) => perMinute(a.driftArcsecPerMinute, a.driftStandardError));
@@ -50,7 +54,7 @@ function drift(run: Run): MountMeasure {
   return { name: 'Drift left after guiding', ra: left(ra), dec: left(dec), note: open };
 }
 
-function polarAlignment(run: Run): MountMeasure {
+function polarAlignment(run: Run): Told {
   const found = run.polarAlignment;
   const name = 'Polar alignment error';
   if (!found) return { name, ra: NO_VALUE, dec: NO_VALUE, note: missing(run, 'polarAlignment') };
@@ -61,7 +65,7 @@ function polarAlignment(run: Run): MountMeasure {
   return { name, ra: NO_VALUE, dec: `at least ${arcminText(found.atLeastArcmin)}`, note };
 }
 
-function uncorrected(run: Run): MountMeasure {
+function uncorrected(run: Run): Told {
   const found = run.uncorrected;
   return {
     name: 'Motion with corrections undone',
@@ -73,7 +77,7 @@ function uncorrected(run: Run): MountMeasure {
   };
 }
 
-function backlash(run: Run): MountMeasure {
+function backlash(run: Run): Told {
   const found = run.backlash;
   const name = 'Backlash';
   if (!found) return { name, ra: NO_VALUE, dec: NO_VALUE, note: missing(run, 'backlash') };
@@ -86,7 +90,7 @@ function backlash(run: Run): MountMeasure {
   };
 }
 
-function response(run: Run): MountMeasure {
+function response(run: Run): Told {
   const found = run.response;
   type Axis = NonNullable<typeof found>['ra'];
   const text = (axis: Axis): string =>
@@ -101,7 +105,7 @@ function response(run: Run): MountMeasure {
   };
 }
 
-function asymmetry(run: Run): MountMeasure {
+function asymmetry(run: Run): Told {
   const found = run.response;
   return {
     name: 'Unevenness of the response',
@@ -111,7 +115,7 @@ function asymmetry(run: Run): MountMeasure {
   };
 }
 
-function gain(run: Run): MountMeasure {
+function gain(run: Run): Told {
   const { ra, dec } = run.loop;
   type Axis = NonNullable<typeof ra>;
   const text = (axis: Axis): string =>
@@ -130,7 +134,7 @@ function gain(run: Run): MountMeasure {
   };
 }
 
-function seeingFloor(run: Run): MountMeasure {
+function seeingFloor(run: Run): Told {
   const found = run.seeingFloor;
   return {
     name: 'Seeing floor',

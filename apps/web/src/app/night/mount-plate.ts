@@ -1,10 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { FigureKey } from '../figures/figure-key/figure-key';
 import { mountMeasures } from './mount-measures';
+import { keyedOn, type FindingNote } from './page-notes';
 import { runTitle, type ShownRun } from './shown-run';
 
 /** The measures of the mount that the chosen run gives, or why it cannot give them. */
 @Component({
   selector: 'app-mount-plate',
+  imports: [FigureKey],
   template: `
     <div class="plate-head">
       <h2>What else the mount did</h2>
@@ -23,6 +26,9 @@ import { runTitle, type ShownRun } from './shown-run';
           <tr class="values">
             <th scope="row">
               {{ measure.name }}
+              @for (key of measure.keys; track key.letter) {
+                <app-figure-key [key]="key" [at]="null" />
+              }
               <span class="narrow">
                 <span>RA {{ measure.ra }}</span>
                 <span>Dec {{ measure.dec }}</span>
@@ -71,7 +77,16 @@ import { runTitle, type ShownRun } from './shown-run';
 })
 export class MountPlate {
   readonly run = input.required<ShownRun>();
+  readonly notes = input.required<readonly FindingNote[]>();
 
   protected readonly title = computed(() => runTitle(this.run()));
-  protected readonly measures = computed(() => mountMeasures(this.run().of.run));
+  protected readonly measures = computed(() => {
+    const notes = keyedOn('mount', this.notes());
+    return mountMeasures(this.run().of.run).map((measure) => ({
+      ...measure,
+      keys: notes
+        .filter(({ finding }) => measure.findings.includes(finding.code))
+        .map(({ key }) => key),
+    }));
+  });
 }

@@ -215,7 +215,7 @@ describe('NightPage', () => {
 
   it('sets a finding beside its figure, with its caution and its gain', async () => {
     const { page } = await renderNight();
-    const note = page.querySelector('.note.leader')!.textContent.replace(/\s+/g, ' ');
+    const note = page.querySelector('app-notes-of .note')!.textContent.replace(/\s+/g, ' ');
     expect(note).toContain('Act');
     expect(note).toContain('The worm puts 0.46″ into RA.');
     expect(note).toContain('Before you beginUnpower the mount');
@@ -236,7 +236,7 @@ describe('NightPage', () => {
     for (const name of ['star', 'budget', 'trace', 'spectrum', 'worm', 'mount']) {
       expect(plate(name)).toContain('Run 1, M 33');
     }
-    expect(page.querySelector('.note.leader')).toBeNull();
+    expect(page.querySelector('app-notes-of .note')).toBeNull();
   });
 
   it('lists what was refused and what was set aside, and offers the file and the document', async () => {

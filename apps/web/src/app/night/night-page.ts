@@ -23,6 +23,7 @@ import { MountPlate } from './mount-plate';
 import { NightLogs } from './night-logs';
 import { NightPlate } from './night-plate';
 import { NotesOf } from './notes-of';
+import { findingNotes } from './page-notes';
 import { ReadingPlate } from './reading-plate';
 import { Recomputing } from './recomputing';
 import { leadingRun, runTitle, shownRuns, type ShownRun } from './shown-run';
@@ -83,6 +84,10 @@ export class NightPage {
       (runs.find(({ id }) => id === before?.value) ?? leadingRun(runs))?.id ?? null,
   });
   protected readonly run = computed(() => this.runs().find((run) => run.id === this.chosenId()));
+  protected readonly notes = computed(() => {
+    const run = this.run();
+    return run ? findingNotes(run) : [];
+  });
   protected readonly runTitle = computed(() => {
     const run = this.run();
     return run ? runTitle(run) : '';

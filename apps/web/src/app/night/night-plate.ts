@@ -2,9 +2,10 @@ import { ChangeDetectionStrategy, Component, computed, input, output } from '@an
 import type { Site } from '@stillpier/contract';
 import type { RunStretch } from '../api/run-stretch';
 import { countedText, percentText, ratioText, secondsText } from '../figures/measure-text';
-import { NightRibbon } from '../figures/night-ribbon/night-ribbon';
+import { NightRibbon, type RibbonKey } from '../figures/night-ribbon/night-ribbon';
 import { endMs, type RibbonRun } from '../figures/night-ribbon/ribbon-night';
 import { nightSpells, ribbonSkies, skyText, sunDown } from './night-sky';
+import { keyedOn, type FindingNote } from './page-notes';
 import type { ShownRun } from './shown-run';
 
 const EDGE_MS = 20 * 60_000;
@@ -26,6 +27,7 @@ export class NightPlate {
   /** null until it is known. */
   readonly site = input.required<Site | null>();
   readonly stretches = input.required<ReadonlyMap<string, RunStretch>>();
+  readonly notes = input.required<readonly FindingNote[]>();
   readonly choose = output<string>();
 
   protected readonly ribbonRuns = computed((): RibbonRun[] =>
@@ -90,6 +92,17 @@ export class NightPlate {
   protected readonly whyNoForecast = computed(
     () => this.chosen().of.run.whyMissing['subs'] ?? null,
   );
+  protected readonly keys = computed((): RibbonKey[] => {
+    const { startMs, of } = this.chosen();
+    if (startMs === null) return [];
+    const [longest] = of.run.setAside
+      .filter(({ reason }) => reason === 'star lost')
+      .sort((a, b) => b.frames - a.frames);
+    return keyedOn('night', this.notes()).map(({ key, finding }) => {
+      const lost = finding.code === 'star-lost' ? longest : undefined;
+      return { ...key, atMs: startMs + 1000 * (lost?.fromSeconds ?? 0) };
+    });
+  });
   protected readonly thinned = computed(() =>
     [...this.stretches().values()].some((stretch) => stretch.thinned),
   );

@@ -1,33 +1,87 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import {
+  afterRenderEffect,
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  DestroyRef,
+  ElementRef,
+  inject,
+  input,
+  signal,
+  viewChildren,
+} from '@angular/core';
 import type { Finding } from '@stillpier/contract';
+import { KeyPlaces } from '../figures/figure-key/key-places';
+import { LeadsTo } from '../figures/figure-key/leads-to';
 import { arcsecText, ratioText } from '../figures/measure-text';
 import { Severity } from '../page/severity';
-import { figureOf, type Figure } from './finding-names';
+import type { Figure } from './finding-names';
+import { besideKeys } from './note-places';
+import type { FindingNote } from './page-notes';
 
-/** The findings that speak about one figure, in the margin beside it. */
+/** From this width on the margin stands beside the figures; below it folds under them. */
+const WITH_MARGIN = '(min-width: 1280px)';
+
+/** The findings that speak about one figure, in the margin beside it, each at the height of its key. */
 @Component({
   selector: 'app-notes-of',
-  imports: [Severity],
+  imports: [LeadsTo, Severity],
   templateUrl: './notes-of.html',
-  styles: `
-    .caution {
-      margin-top: 10px;
-    }
-  `,
+  styleUrl: './notes-of.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { role: 'complementary', '[attr.aria-label]': 'label()' },
 })
 export class NotesOf {
-  readonly figure = input.required<Figure>();
-  /** All of the run; those that speak about another figure are left out. */
-  readonly findings = input.required<readonly Finding[]>();
+  private readonly keyPlaces = inject(KeyPlaces);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
 
+  readonly figure = input.required<Figure>();
+  /** All of the page; those that speak about another figure are left out. */
+  readonly notes = input.required<readonly FindingNote[]>();
+
+  private readonly elements = viewChildren<ElementRef<HTMLElement>>('note');
   protected readonly label = computed(() => `Findings beside the figure of the ${this.figure()}`);
-  protected readonly notes = computed(() =>
-    this.findings()
-      .filter((finding) => figureOf(finding) === this.figure())
-      .map((finding) => ({ ...finding, gains: gainsOf(finding) })),
+  protected readonly shown = computed(() =>
+    this.notes()
+      .filter(({ figure }) => figure === this.figure())
+      .map((note) => ({ ...note, gains: gainsOf(note.finding) })),
   );
+
+  /** What moves a key without redrawing it: the width of the page, fonts, a table that opens. */
+  private readonly relaid = signal(0);
+  /** Room above each note, in pixels. */
+  protected readonly roomsPx = signal<readonly number[]>([]);
+
+  constructor() {
+    const observer = new ResizeObserver(() => {
+      this.relaid.update((count) => count + 1);
+    });
+    observer.observe(this.host.parentElement ?? this.host);
+    inject(DestroyRef).onDestroy(() => {
+      observer.disconnect();
+    });
+    afterRenderEffect(() => {
+      this.relaid();
+      this.keyPlaces.moved();
+      this.roomsPx.set(this.rooms());
+    });
+  }
+
+  private rooms(): number[] {
+    const elements = this.elements();
+    if (!matchMedia(WITH_MARGIN).matches) return [];
+    const topPx =
+      this.host.getBoundingClientRect().top + parseFloat(getComputedStyle(this.host).paddingTop);
+    return besideKeys(
+      this.shown().map(({ key }, i) => {
+        const middlePx = key ? this.keyPlaces.middlePx(key.letter) : null;
+        return {
+          keyPx: middlePx === null ? null : middlePx - topPx,
+          heightPx: elements[i]?.nativeElement.offsetHeight ?? 0,
+        };
+      }),
+    );
+  }
 }
 
 function gainsOf({ gain }: Finding): { label: string; value: string }[] {

@@ -1,9 +1,14 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { SpectrumCurve } from '@stillpier/contract';
 import { arcsecText, secondsText } from '../figures/measure-text';
-import { SpectrumChart, type SpectrumPeak } from '../figures/spectrum-chart/spectrum-chart';
+import {
+  SpectrumChart,
+  type SpectrumKey,
+  type SpectrumPeak,
+} from '../figures/spectrum-chart/spectrum-chart';
 import { Failure } from '../page/failure';
 import { Waiting } from '../page/waiting';
+import { keyedOn, periodOf, type FindingNote } from './page-notes';
 import { runTitle, type ShownRun } from './shown-run';
 
 /** The periods that carry the guide error of the chosen run. */
@@ -19,6 +24,7 @@ export class SpectrumPlate {
   readonly curve = input.required<SpectrumCurve | undefined>();
   readonly error = input.required<unknown>();
   readonly topArcsec = input.required<number | null>();
+  readonly notes = input.required<readonly FindingNote[]>();
   readonly retry = output();
 
   protected readonly title = computed(() => runTitle(this.run()));
@@ -27,6 +33,13 @@ export class SpectrumPlate {
     ...(this.spectrum()?.ra.peaks ?? []).map((peak) => ({ ...peak, axis: 'RA' as const })),
     ...(this.spectrum()?.dec.peaks ?? []).map((peak) => ({ ...peak, axis: 'Dec' as const })),
   ]);
+  protected readonly keys = computed((): SpectrumKey[] => {
+    const notes = keyedOn('spectrum', this.notes());
+    return notes.map((note) => ({
+      ...note.key,
+      periodSeconds: periodOf(note, notes, this.run().of.run),
+    }));
+  });
   protected readonly label = computed(() => {
     const [first] = [...this.peaks()].sort((a, b) => b.amplitudeArcsec - a.amplitudeArcsec);
     return first

@@ -3,6 +3,7 @@ import { RouterLink } from '@angular/router';
 import { arcsecText, degreesText, ratioText } from '../figures/measure-text';
 import { Roundel } from '../figures/roundel/roundel';
 import { angleFromRaDegrees } from '../figures/roundel/star-shape';
+import { keyedOn, type FindingNote } from './page-notes';
 import { RunTable } from './run-table';
 import { runTitle, type ShownRun } from './shown-run';
 
@@ -20,12 +21,14 @@ export class StarPlate {
   readonly timeZone = input.required<string>();
   readonly halfWidthArcsec = input.required<number>();
   readonly rigId = input.required<string>();
+  readonly notes = input.required<readonly FindingNote[]>();
   readonly choose = output<string>();
 
   protected readonly title = computed(() => runTitle(this.chosen()));
   protected readonly run = computed(() => this.chosen().of.run);
   protected readonly seeing = computed(() => this.chosen().of.seeingFwhmArcsec);
   protected readonly pxArcsec = computed(() => this.chosen().of.optics.imagingScaleArcsecPerPx);
+  protected readonly keys = computed(() => keyedOn('star', this.notes()).map(({ key }) => key));
   protected readonly width = computed(() => arcsecText(2 * this.halfWidthArcsec()));
 
   /** The star and the seeing that it was predicted with. */

@@ -1,18 +1,25 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { Finding } from '@stillpier/contract';
+import { LeadsTo } from '../figures/figure-key/leads-to';
 import { Severity } from '../page/severity';
+import type { FindingNote } from './page-notes';
 
 const WORDS = { act: 'to act on', watch: 'to watch', fine: 'fine' } as const;
 
-/** How many findings of a run are to act on, to watch, and fine. */
+/** How many findings of a run are to act on, to watch, and fine; each count leads to its first note. */
 @Component({
   selector: 'app-tally',
-  imports: [Severity],
+  imports: [LeadsTo, Severity],
   template: `
     <p class="of">{{ of() }}</p>
     <p class="tally">
       @for (count of counts(); track count.level) {
-        <app-severity [level]="count.level" [words]="count.text" />
+        @if (count.first; as id) {
+          <a [appLeadsTo]="id">
+            <app-severity [level]="count.level" [words]="count.text" />
+          </a>
+        } @else {
+          <app-severity [level]="count.level" [words]="count.text" />
+        }
       }
     </p>
   `,
@@ -25,14 +32,14 @@ const WORDS = { act: 'to act on', watch: 'to watch', fine: 'fine' } as const;
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Tally {
-  readonly findings = input.required<readonly Finding[]>();
+  readonly notes = input.required<readonly FindingNote[]>();
   /** The run, by its title. */
   readonly of = input.required<string>();
 
   protected readonly counts = computed(() =>
     (['act', 'watch', 'fine'] as const).map((level) => {
-      const count = this.findings().filter((finding) => finding.severity === level).length;
-      return { level, text: `${count} ${WORDS[level]}` };
+      const notes = this.notes().filter(({ finding }) => finding.severity === level);
+      return { level, text: `${notes.length} ${WORDS[level]}`, first: notes[0]?.id };
     }),
   );
 }

@@ -1,10 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, input, model, output } from '@angular/core';
 import type { RunStretch } from '../api/run-stretch';
 import { arcsecText, countText } from '../figures/measure-text';
-import { TraceChart } from '../figures/trace-chart/trace-chart';
+import { TraceChart, type TraceKey } from '../figures/trace-chart/trace-chart';
 import type { SecondsRange } from '../figures/trace-chart/trace-stretch';
+import { worstMoments } from '../figures/trace-chart/worst-moments';
 import { Failure } from '../page/failure';
 import { Waiting } from '../page/waiting';
+import { keyedOn, type FindingNote } from './page-notes';
 import { RunChips } from './run-chips';
 import { runTitle, type ShownRun } from './shown-run';
 
@@ -26,6 +28,7 @@ export class TracePlate {
   readonly halfRangeArcsec = input.required<number>();
   readonly maySelect = input.required<boolean>();
   readonly selection = model.required<SecondsRange | null>();
+  readonly notes = input.required<readonly FindingNote[]>();
   readonly choose = output<string>();
   readonly stretchWanted = output<SecondsRange>();
   readonly retry = output();
@@ -35,6 +38,16 @@ export class TracePlate {
   protected readonly aside = computed(() => {
     const { frames, used } = this.run();
     return `${countText(frames - used)} of ${countText(frames)}`;
+  });
+  protected readonly keys = computed((): TraceKey[] => {
+    const stretch = this.stretch();
+    if (!stretch) return [];
+    const [worst] = worstMoments(stretch, 1, 0);
+    return keyedOn('trace', this.notes()).map(({ key, axis }) => ({
+      ...key,
+      axis: worst?.axis ?? axis,
+      atSeconds: worst?.seconds ?? 0,
+    }));
   });
   protected readonly why = computed(
     () => this.run().whyMissing['ra'] ?? 'The run has no error in arcseconds.',

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { arcsecText, ratioText, secondsText } from '../figures/measure-text';
 import { WormDial } from '../figures/worm-dial/worm-dial';
+import { keyedOn, type FindingNote } from './page-notes';
 import { runTitle, type ShownRun } from './shown-run';
 
 /** The mount's own error over one turn of the worm, corrections undone. */
@@ -13,8 +14,10 @@ import { runTitle, type ShownRun } from './shown-run';
 })
 export class WormPlate {
   readonly run = input.required<ShownRun>();
+  readonly notes = input.required<readonly FindingNote[]>();
 
   protected readonly title = computed(() => runTitle(this.run()));
+  protected readonly keys = computed(() => keyedOn('worm', this.notes()).map(({ key }) => key));
   protected readonly error = computed(() => this.run().of.run.periodicError);
   protected readonly peakToPeak = computed(() =>
     arcsecText(this.error()?.peakToPeakArcsec ?? null),

@@ -1,11 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { Drawing } from '../drawing/drawing';
 import { elementWidthPx } from '../element-width';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { arcsecText, percentText } from '../measure-text';
-import { placeParts, titleOf, type Axis, type AxisBudget } from './budget-parts';
+import { placeParts, titleOf, type Axis, type AxisBudget, type PartName } from './budget-parts';
 import {
   FACING_HEIGHT_PX,
+  facingKeyPoint,
   facingRulers,
   SINGLE_HEIGHT_PX,
   singleRuler,
@@ -14,10 +16,16 @@ import {
 
 const FACING_FROM_PX = 720;
 
+/** A key at a part of one axis. */
+export interface BudgetKey extends KeyOfNote {
+  readonly axis: Axis;
+  readonly part: PartName;
+}
+
 /** What the error of each axis is made of, as parts of its mean square. */
 @Component({
   selector: 'app-budget-ruler',
-  imports: [Drawing, FigureTable],
+  imports: [Drawing, FigureKey, FigureTable],
   templateUrl: './budget-ruler.html',
   styleUrl: './budget-ruler.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -25,6 +33,7 @@ const FACING_FROM_PX = 720;
 export class BudgetRuler {
   readonly ra = input.required<AxisBudget>();
   readonly dec = input.required<AxisBudget>();
+  readonly keys = input<readonly BudgetKey[]>([]);
 
   protected readonly widthPx = elementWidthPx(920);
   protected readonly facing = computed(() => this.widthPx() >= FACING_FROM_PX);
@@ -32,6 +41,9 @@ export class BudgetRuler {
   protected readonly singleHeightPx = SINGLE_HEIGHT_PX;
   protected readonly facingShapes = computed(() =>
     facingRulers(this.ra(), this.dec(), this.widthPx()),
+  );
+  protected readonly facingKeys = computed(() =>
+    this.keys().map((key) => ({ ...key, at: facingKeyPoint(key, this.widthPx()) })),
   );
   protected readonly label = computed(
     () => `${largestOf('RA', this.ra())} ${largestOf('Dec', this.dec())}`,
@@ -52,6 +64,7 @@ export class BudgetRuler {
           size: arcsecText(part.rmsArcsec),
           leaves: arcsecText(part.rmsIfCuredArcsec),
           swatch: swatch(part, axis),
+          keys: this.keys().filter((key) => key.axis === axis && key.part === part.name),
         })),
       };
     }),

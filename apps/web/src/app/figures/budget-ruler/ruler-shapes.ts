@@ -1,4 +1,5 @@
 import { line, path, rect, text, type Shape } from '../drawing/shapes';
+import type { KeyPoint } from '../figure-key/figure-key';
 import { arcsecText } from '../measure-text';
 import {
   fillOf,
@@ -7,6 +8,7 @@ import {
   placeParts,
   type Axis,
   type AxisBudget,
+  type PartName,
   type PlacedPart,
 } from './budget-parts';
 
@@ -28,6 +30,16 @@ export function facingRulers(ra: AxisBudget, dec: AxisBudget, widthPx: number): 
     ...ruler('dec', dec, widthPx, columnPx),
     ...sharedScale(widthPx),
   ];
+}
+
+/** To the right of the size of a part. */
+export function facingKeyPoint(
+  { axis, part }: { readonly axis: Axis; readonly part: PartName },
+  widthPx: number,
+): KeyPoint {
+  const columnPx = (widthPx - LEFT_PX - 2) / PART_ORDER.length;
+  const value = axis === 'ra' ? 60 : 260;
+  return { xPx: LEFT_PX + PART_ORDER.indexOf(part) * columnPx + 62, yPx: value - 5 };
 }
 
 function ruler(axis: Axis, budget: AxisBudget, widthPx: number, columnPx: number): Shape[] {

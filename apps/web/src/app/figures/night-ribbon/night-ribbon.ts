@@ -2,19 +2,25 @@ import { ChangeDetectionStrategy, Component, computed, input, output } from '@an
 import { clockText } from '../clock';
 import { Drawing } from '../drawing/drawing';
 import { elementWidthPx } from '../element-width';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { ratioText } from '../measure-text';
 import { endMs, subCells, type RibbonRun } from './ribbon-night';
 import type { RibbonSky } from './ribbon-sky';
-import { tallRibbon, tallTimeScale } from './tall-ribbon';
-import { timeScale, wideRibbon, type RibbonView } from './wide-ribbon';
+import { tallKeyPoint, tallRibbon, tallTimeScale } from './tall-ribbon';
+import { timeScale, wideKeyPoint, wideRibbon, type RibbonView } from './wide-ribbon';
 
 const TALL_BELOW_PX = 560;
+
+/** A key at an instant of the night. */
+export interface RibbonKey extends KeyOfNote {
+  readonly atMs: number;
+}
 
 /** The night on one time axis: how wide the error ran, what was set aside, and the subs that it would have cost. */
 @Component({
   selector: 'app-night-ribbon',
-  imports: [Drawing, FigureTable],
+  imports: [Drawing, FigureKey, FigureTable],
   template: `
     <app-drawing
       [label]="label()"
@@ -22,7 +28,11 @@ const TALL_BELOW_PX = 560;
       [heightPx]="drawing().heightPx"
       [shapes]="drawing().shapes"
       (click)="select($event)"
-    />
+    >
+      @for (key of placedKeys(); track key.letter) {
+        <app-figure-key [key]="key" [at]="key.at" />
+      }
+    </app-drawing>
     <app-figure-table of="Subs of the night" [columns]="tableColumns" [rows]="tableRows()" />
   `,
   styles: `
@@ -42,6 +52,7 @@ export class NightRibbon {
   readonly fromMs = input.required<number>();
   readonly toMs = input.required<number>();
   readonly timeZone = input.required<string>();
+  readonly keys = input<readonly RibbonKey[]>([]);
   /** For the pointer; pages offer the runs as buttons too. */
   readonly runSelected = output<string>();
 
@@ -59,6 +70,11 @@ export class NightRibbon {
   protected readonly drawing = computed(() =>
     this.tall() ? tallRibbon(this.view()) : wideRibbon(this.view()),
   );
+
+  protected readonly placedKeys = computed(() => {
+    const place = this.tall() ? tallKeyPoint : wideKeyPoint;
+    return this.keys().map((key) => ({ ...key, at: place(this.view(), key.atMs) }));
+  });
 
   protected readonly tableColumns: readonly FigureColumn[] = [
     { head: 'Run', numeric: false },

@@ -1,4 +1,5 @@
 import { clockText, clockTicks } from '../clock';
+import type { KeyPoint } from '../figure-key/figure-key';
 import { hatched, line, path, rect, text, type Shape } from '../drawing/shapes';
 import { arcsecText, ratioText } from '../measure-text';
 import { linearScale, type Scale } from '../scale';
@@ -26,6 +27,11 @@ export function tallTimeScale(view: RibbonView): Scale {
   const hours = (view.toMs - view.fromMs) / 3_600_000;
   const length = Math.max(LEAST_PX, hours * PX_PER_HOUR);
   return linearScale([view.fromMs, view.toMs], [TOP_PX, TOP_PX + length]);
+}
+
+/** Inside the left edge of the band. */
+export function tallKeyPoint(view: RibbonView, atMs: number): KeyPoint {
+  return { xPx: LEFT_PX + 13, yPx: tallTimeScale(view)(atMs) + 11 };
 }
 
 /** For narrow screens time runs down: RA to the left, Dec to the right, subs as bars beside them. */

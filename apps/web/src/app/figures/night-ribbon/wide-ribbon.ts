@@ -1,4 +1,5 @@
 import { clockText, clockTicks } from '../clock';
+import type { KeyPoint } from '../figure-key/figure-key';
 import { hatched, line, path, rect, text, type Shape } from '../drawing/shapes';
 import { arcsecText, ratioText } from '../measure-text';
 import { linearScale, type Scale } from '../scale';
@@ -42,6 +43,11 @@ const CHARACTER_PX = 7.3;
 
 export function timeScale(view: RibbonView): Scale {
   return linearScale([view.fromMs, view.toMs], [LEFT_PX, view.widthPx]);
+}
+
+/** Inside the upper edge of the band. */
+export function wideKeyPoint(view: RibbonView, atMs: number): KeyPoint {
+  return { xPx: timeScale(view)(atMs), yPx: TOP_PX + 13 };
 }
 
 /** Half the height of the band in arcseconds: 1.75″, or more where the night needs it. */

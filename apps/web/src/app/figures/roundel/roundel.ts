@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { arcsecText, degreesText, ratioText } from '../measure-text';
 import { angleFromRaDegrees, type StarShape } from './star-shape';
 
@@ -9,6 +10,7 @@ const RIM_DEGREES = Array.from({ length: 36 }, (_, i) => i * 10);
 /** The star that the camera would record, drawn at its true shape on the camera's own pixels. RA to the right. */
 @Component({
   selector: 'app-roundel',
+  imports: [FigureKey],
   templateUrl: './roundel.html',
   styleUrl: './roundel.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -19,6 +21,7 @@ export class Roundel {
   /** null: no pixel grid is drawn. */
   readonly imagingScaleArcsecPerPx = input.required<number | null>();
   readonly halfWidthArcsec = input.required<number>();
+  readonly keys = input<readonly KeyOfNote[]>([]);
   /** For lists: cropped to the rim, without lettering, and as wide as the place it stands in. */
   readonly small = input(false);
 
@@ -66,6 +69,11 @@ export class Roundel {
     const [outerX, outerY] = onRim(-this.angleDegrees(), RIM_PX + 8);
     return { x, y, outerX, outerY };
   });
+
+  /** Beside the rim, upper right. */
+  protected readonly placedKeys = computed(() =>
+    this.keys().map((key, i) => ({ key, at: { xPx: 212, yPx: 60 + 22 * i } })),
+  );
 
   protected readonly label = computed(() => {
     const star = this.star();

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal } f
 import { NgxEchartsDirective, provideEchartsCore } from 'ngx-echarts';
 import { init } from '../echarts-setup';
 import { elementWidthPx } from '../element-width';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { arcsecText, percentText, secondsText } from '../measure-text';
 import { ReadingLine } from '../reading-line/reading-line';
@@ -24,6 +25,11 @@ const MOST_NAMES = 6;
 const HEADROOM = 1.35;
 const CHARACTER_PX = 7.3;
 
+/** A key at a period; null: at the left, for the curve as a whole. */
+export interface SpectrumKey extends KeyOfNote {
+  readonly periodSeconds: number | null;
+}
+
 export interface SpectrumPeak {
   readonly axis: 'RA' | 'Dec';
   readonly periodSeconds: number;
@@ -36,7 +42,7 @@ export interface SpectrumPeak {
 /** Amplitude of the guide error by period: RA filled, Dec a line, the strongest peaks named at their place. */
 @Component({
   selector: 'app-spectrum-chart',
-  imports: [FigureTable, NgxEchartsDirective, ReadingLine],
+  imports: [FigureKey, FigureTable, NgxEchartsDirective, ReadingLine],
   providers: [provideEchartsCore({ echarts: { init } })],
   templateUrl: './spectrum-chart.html',
   styleUrl: './spectrum-chart.scss',
@@ -51,6 +57,7 @@ export class SpectrumChart {
   readonly peaks = input.required<readonly SpectrumPeak[]>();
   /** The same for all runs that are compared; null: from this curve. */
   readonly topArcsec = input.required<number | null>();
+  readonly keys = input<readonly SpectrumKey[]>([]);
 
   private readonly widthPx = elementWidthPx(920);
   protected readonly heightPx = HEIGHT_PX;
@@ -116,6 +123,17 @@ export class SpectrumChart {
       },
     );
   });
+
+  /** To the left of the foot of its peak. */
+  protected readonly placedKeys = computed(() =>
+    this.keys().map((key) => ({
+      ...key,
+      at: {
+        xPx: key.periodSeconds === null ? LEFT_PX + 12 : this.xPx()(key.periodSeconds) - 14,
+        yPx: this.basePx - 40,
+      },
+    })),
+  );
 
   private curveTopPx(fromPx: number, toPx: number): number {
     const { periodSeconds, raAmplitudeArcsec, decAmplitudeArcsec } = this.held();

@@ -11,16 +11,26 @@ import {
   signal,
 } from '@angular/core';
 import { NgxEchartsDirective, provideEchartsCore } from 'ngx-echarts';
-import { clockSecondsText, clockText, clockTicks } from '../clock';
 import { init } from '../echarts-setup';
 import { elementWidthPx } from '../element-width';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
-import { countText, secondsText, signedArcsecText } from '../measure-text';
+import { countText, secondsText } from '../measure-text';
 import { ReadingLine } from '../reading-line/reading-line';
 import { TokenColours } from '../token-colours';
+import { frameReading, type SetAsideStretch } from './frame-reading';
 import { StretchSelection } from './stretch-selection';
 import { traceColumns } from './trace-columns';
-import { BOTTOM_PX, HEIGHT_PX, LEFT_PX, RIGHT_PX, traceContent, traceFrame } from './trace-options';
+import {
+  BOTTOM_PX,
+  HEIGHT_PX,
+  LEFT_PX,
+  RIGHT_PX,
+  stripTopPx,
+  traceContent,
+  traceFrame,
+} from './trace-options';
+import { traceTicks } from './trace-ticks';
 import {
   firstAtOrAfter,
   nearestIndex,
@@ -34,8 +44,10 @@ const ASK_AFTER_MS = 200;
 const COARSE_FROM = 2.5;
 const MOST_TABLE_ROWS = 300;
 
-export interface SetAsideStretch extends SecondsRange {
-  readonly reason: string;
+/** A key at a time of the run, on the strip of one axis. */
+export interface TraceKey extends KeyOfNote {
+  readonly atSeconds: number;
+  readonly axis: 'ra' | 'dec';
 }
 
 interface DataZoomEvent {
@@ -47,7 +59,7 @@ interface DataZoomEvent {
 /** Guide error of a run over time: RA above Dec on one scale, from the whole run down to single frames. */
 @Component({
   selector: 'app-trace-chart',
-  imports: [FigureTable, NgxEchartsDirective, ReadingLine, StretchSelection],
+  imports: [FigureKey, FigureTable, NgxEchartsDirective, ReadingLine, StretchSelection],
   providers: [provideEchartsCore({ echarts: { init } })],
   templateUrl: './trace-chart.html',
   styleUrl: './trace-chart.scss',
@@ -69,6 +81,7 @@ export class TraceChart {
   readonly setAside = input.required<readonly SetAsideStretch[]>();
   /** The same for all runs that are compared. */
   readonly halfRangeArcsec = input.required<number>();
+  readonly keys = input<readonly TraceKey[]>([]);
   readonly stretchWanted = output<SecondsRange>();
   /** Whether a stretch of the run may be selected. */
   readonly maySelect = input(false);
@@ -115,6 +128,15 @@ export class TraceChart {
     }),
     dataZoom: [{ startValue: this.sight().fromSeconds, endValue: this.sight().toSeconds }],
   }));
+  /** Inside the upper edge of the strip; at the near side where its time is out of sight. */
+  protected readonly placedKeys = computed(() => {
+    const { fromSeconds, toSeconds } = this.sight();
+    return this.keys().map((key) => {
+      const share = (key.atSeconds - fromSeconds) / (toSeconds - fromSeconds);
+      const xPx = LEFT_PX + Math.min(1, Math.max(0, share)) * this.plotPx();
+      return { ...key, at: { xPx, yPx: stripTopPx(key.axis) + 9 } };
+    });
+  });
   protected readonly drawn = computed(() => {
     const step = this.columns().stepSeconds;
     if (step === 0) return 'Dots: single frames.';
@@ -250,48 +272,22 @@ export class TraceChart {
     this.readingSeconds.set(times[Math.min(last, Math.max(first, index))] ?? null);
   }
 
-  private readonly ticks = computed(() => {
-    const { fromSeconds, toSeconds } = this.sight();
-    const most = Math.max(3, Math.floor(this.plotPx() / 72));
-    const startMs = this.startMs();
-    // Without a time of day the axis counts hours from the start of the run.
-    const zeroMs = startMs ?? 0;
-    const zone = startMs === null ? 'UTC' : this.timeZone();
-    const fine = toSeconds - fromSeconds < 60 * most;
-    const text = fine ? clockSecondsText : clockText;
-    return clockTicks(zeroMs + fromSeconds * 1000, zeroMs + toSeconds * 1000, most, zone).map(
-      (ms) => ({ seconds: (ms - zeroMs) / 1000, text: text(ms, zone) }),
-    );
-  });
+  private readonly ticks = computed(() =>
+    traceTicks(this.sight(), this.startMs(), this.timeZone(), this.plotPx()),
+  );
 
   private readingOf(shown: TraceStretch, index: number) {
-    const seconds = shown.timeSeconds[index] ?? 0;
-    const startMs = this.startMs();
     const { fromSeconds, toSeconds } = this.sight();
-    const aside = this.setAside().find(
-      (range) => seconds >= range.fromSeconds && seconds <= range.toSeconds,
-    );
-    return {
-      seconds,
-      leftPx: LEFT_PX + ((seconds - fromSeconds) / (toSeconds - fromSeconds)) * this.plotPx(),
-      time: clockSecondsText(
-        (startMs ?? 0) + seconds * 1000,
-        startMs === null ? 'UTC' : this.timeZone(),
-      ),
-      ra: extentText(shown.ra.leastArcsec[index], shown.ra.greatestArcsec[index]),
-      dec: extentText(shown.dec.leastArcsec[index], shown.dec.greatestArcsec[index]),
-      state: shown.setAside[index] ? `set aside${aside ? `, ${aside.reason}` : ''}` : 'kept',
-    };
+    const reading = frameReading(shown, index, {
+      setAside: this.setAside(),
+      startMs: this.startMs(),
+      timeZone: this.timeZone(),
+    });
+    const share = (reading.seconds - fromSeconds) / (toSeconds - fromSeconds);
+    return { ...reading, leftPx: LEFT_PX + share * this.plotPx() };
   }
 }
 
 function covers(stretch: SecondsRange, sight: SecondsRange): boolean {
   return stretch.fromSeconds <= sight.fromSeconds + 1 && stretch.toSeconds >= sight.toSeconds - 1;
-}
-
-function extentText(least = NaN, greatest = NaN): string {
-  if (Number.isNaN(least)) return 'no star';
-  return least === greatest
-    ? signedArcsecText(least)
-    : `${signedArcsecText(least)} to ${signedArcsecText(greatest)}`;
 }

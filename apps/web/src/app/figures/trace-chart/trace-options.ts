@@ -19,6 +19,8 @@ const STRIPS = [
   { axis: 'ra', name: 'RA', topPx: TOP_PX },
   { axis: 'dec', name: 'Dec', topPx: TOP_PX + STRIP_PX + GAP_PX },
 ] as const;
+export const stripTopPx = (axis: 'ra' | 'dec'): number =>
+  STRIPS.find((strip) => strip.axis === axis)?.topPx ?? TOP_PX;
 export const BOTTOM_PX = TOP_PX + 2 * STRIP_PX + GAP_PX;
 export const HEIGHT_PX = BOTTOM_PX + 26;
 const NARROWEST_HATCH_PX = 3.2;

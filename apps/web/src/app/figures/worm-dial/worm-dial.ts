@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { Drawing } from '../drawing/drawing';
+import { FigureKey, type KeyOfNote } from '../figure-key/figure-key';
 import { FigureTable, type FigureColumn } from '../figure-table/figure-table';
 import { NO_VALUE, signedArcsecText } from '../measure-text';
 import { dialReachArcsec, dialShapes, ringStepArcsec, type DialBin } from './dial-shapes';
@@ -9,9 +10,13 @@ const SIZE_PX = 340;
 /** The periodic error over one turn of the worm, corrections undone. */
 @Component({
   selector: 'app-worm-dial',
-  imports: [Drawing, FigureTable],
+  imports: [Drawing, FigureKey, FigureTable],
   template: `
-    <app-drawing [label]="label()" [widthPx]="sizePx" [heightPx]="sizePx" [shapes]="shapes()" />
+    <app-drawing [label]="label()" [widthPx]="sizePx" [heightPx]="sizePx" [shapes]="shapes()">
+      @for (placed of placedKeys(); track placed.key.letter) {
+        <app-figure-key [key]="placed.key" [at]="placed.at" />
+      }
+    </app-drawing>
     <p class="caption">
       Rings are {{ ringStep() }}″ apart, outwards is positive; the solid circle is zero.
     </p>
@@ -28,9 +33,14 @@ export class WormDial {
   readonly bins = input.required<readonly DialBin[]>();
   /** Says the result. */
   readonly label = input.required<string>();
+  readonly keys = input<readonly KeyOfNote[]>([]);
 
   protected readonly sizePx = SIZE_PX;
   protected readonly shapes = computed(() => dialShapes(this.bins(), SIZE_PX));
+  /** In the middle, where nothing is drawn. */
+  protected readonly placedKeys = computed(() =>
+    this.keys().map((key, i) => ({ key, at: { xPx: SIZE_PX / 2, yPx: SIZE_PX / 2 + 22 * i } })),
+  );
   protected readonly ringStep = computed(() => ringStepArcsec(dialReachArcsec(this.bins())));
 
   protected readonly tableColumns: readonly FigureColumn[] = [
