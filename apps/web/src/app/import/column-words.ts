@@ -48,6 +48,7 @@ const DELIMITER_WORDS: Record<string, string> = {
   ' ': 'blanks',
 };
 
-export function delimiterWord(delimiter: string): string {
-  return DELIMITER_WORDS[delimiter] ?? delimiter;
-}
+export const DELIMITER_CHOICES = Object.entries(DELIMITER_WORDS).map(([value, words]) => ({
+  value,
+  words,
+}));

@@ -27,12 +27,12 @@ import {
             class="cdk-visually-hidden"
             type="file"
             multiple
-            accept=".csv,.txt,.log,.tsv,text/csv,text/plain"
+            accept=".csv,.txt,.log,.tsv,.gz,text/csv,text/plain,application/gzip"
             (change)="choose()"
           />
         </label>
       </p>
-      <p class="kinds">CSV or other text with a column for each value</p>
+      <p class="kinds">CSV or other text with a column for each value, also packed by gzip</p>
     </div>
   `,
   styleUrl: './drop-zone.scss',

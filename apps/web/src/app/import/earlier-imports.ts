@@ -1,16 +1,17 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { importPaths, type LogImport } from '@stillpier/contract';
+import type { LogImport } from '@stillpier/contract';
 import { dayText, localDateTimeText } from '../figures/clock';
 import { bytesText } from '../figures/measure-text';
 import { Severity } from '../page/severity';
 import { stateOfImport } from './file-list';
+import { Progress } from './progress';
 
 /** What was sent to the rig before, newest first. */
 @Component({
   selector: 'app-earlier-imports',
-  imports: [MatButton, RouterLink, Severity],
+  imports: [MatButton, Progress, RouterLink, Severity],
   templateUrl: './earlier-imports.html',
   styleUrl: './earlier-imports.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -30,7 +31,6 @@ export class EarlierImports {
       added: dayText(localDateTimeText(Date.parse(of.createdAt), this.timeZone()).slice(0, 10)),
       size: bytesText(of.sizeBytes),
       state: stateOfImport(of),
-      original: importPaths.original(this.rigId(), of.id),
     })),
   );
 

@@ -3,10 +3,11 @@ import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import type { LogImport } from '@stillpier/contract';
 import { dayText } from '../figures/clock';
-import { bytesText, countText, percentText } from '../figures/measure-text';
+import { bytesText, countText } from '../figures/measure-text';
 import { Severity } from '../page/severity';
 import type { DeskFile } from './import-desk';
 import { lacksUnit } from './intake';
+import { Progress } from './progress';
 
 interface FileState {
   readonly level: 'fine' | 'watch' | 'act' | null;
@@ -21,7 +22,7 @@ interface FileState {
 /** The files that are being added, each with what has become of it. */
 @Component({
   selector: 'app-file-list',
-  imports: [MatButton, RouterLink, Severity],
+  imports: [MatButton, Progress, RouterLink, Severity],
   templateUrl: './file-list.html',
   styleUrl: './file-list.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -33,6 +34,7 @@ export class FileList {
   readonly selectedId = input.required<number | null>();
   readonly selected = output<number>();
   readonly removed = output<number>();
+  readonly stopped = output<DeskFile>();
   readonly sendAgain = output<DeskFile>();
   readonly readAgain = output<LogImport>();
 
@@ -46,12 +48,12 @@ export class FileList {
         name: file.file.name,
         size: bytesText(file.file.size),
         state: stateOf(file, of),
-        canGo: send === null || send.at === 'refused',
+        canGo: send === null || send.at === 'refused' || send.at === 'stopped',
+        canStop: send?.at === 'queued' || send?.at === 'sending',
       };
     }),
   );
 
-  protected readonly percent = percentText;
   protected readonly day = dayText;
 }
 
@@ -62,6 +64,10 @@ function stateOf(file: DeskFile, of: LogImport | undefined): FileState {
   switch (send?.at) {
     case undefined:
       return stateBeforeSending(file);
+    case 'queued':
+      return { ...NOTHING, words: 'Waiting to be sent' };
+    case 'stopped':
+      return { ...NOTHING, words: 'Stopped before it had arrived', again: 'send' };
     case 'sending':
       return { ...NOTHING, words: 'Sending', share: send.share };
     case 'refused':

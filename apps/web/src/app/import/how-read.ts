@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { secondsText } from '../figures/measure-text';
 import { cadenceSeconds } from './cadence';
-import { delimiterWord, UNIT_WORDS } from './column-words';
+import { UNIT_WORDS } from './column-words';
 import type { Intake } from './intake';
 
 /** How a file is written, as it was found out. */
@@ -27,20 +27,11 @@ export class HowRead {
   readonly intake = input.required<Intake>();
 
   protected readonly facts = computed(() => {
-    const { preview, choices, headerCells, needsStart } = this.intake();
+    const { preview, choices, needsStart } = this.intake();
     if (!preview) return [];
     const time = choices.find(({ role }) => role === 'time')?.unit;
     const cadence = cadenceSeconds(preview, choices);
     return [
-      { name: 'Delimiter', value: delimiterWord(preview.delimiter) },
-      { name: 'Decimal mark', value: preview.decimal === ',' ? 'comma' : 'point' },
-      {
-        name: 'Header',
-        value:
-          preview.headerLine === null
-            ? 'none'
-            : `line ${preview.headerLine}, ${headerCells.length} names`,
-      },
       ...(time
         ? [{ name: 'Time', value: UNIT_WORDS[time] + (needsStart ? ', no date' : '') }]
         : []),

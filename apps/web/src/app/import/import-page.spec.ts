@@ -6,6 +6,7 @@ import {
   columnMapPaths,
   importPaths,
   type LogImport,
+  ownColumnMapPaths,
   type Rig,
   rigPaths,
   setupPaths,
@@ -50,6 +51,21 @@ const imported = (more: Partial<LogImport>): LogImport => ({
   ...more,
 });
 
+const DOCUMENT = {
+  reading: {
+    lines: 7204,
+    frames: 7200,
+    refusedCount: 3,
+    refused: [{ line: 2118, reason: 'The time runs backwards.' }],
+    delimiter: ',',
+    decimal: '.',
+    encoding: 'utf-8',
+    headerLine: 1,
+    columns: {},
+    warnings: ['The frames come every 2 s, then every 4 s from line 900.'],
+  },
+};
+
 const KNOWN = new File(
   [
     'timestamp,ra error arcsec,dec error arcsec\n' +
@@ -74,6 +90,7 @@ async function renderImport() {
   http.expectOne(rigPaths.one(RIG)).flush(rig);
   http.expectOne(setupPaths.all(RIG)).flush([]);
   http.expectOne(columnMapPaths.all(RIG)).flush([]);
+  http.expectOne(ownColumnMapPaths.all).flush([]);
   http.expectOne(importPaths.all(RIG)).flush({ items: [], next: null });
   await fixture.whenStable();
   const page = fixture.nativeElement as HTMLElement;
@@ -140,7 +157,11 @@ describe('ImportPage', () => {
         nights: ['2026-11-28'],
       }),
     );
+    TestBed.tick();
+    http.expectOne(importPaths.document(RIG, imported({}).id)).flush(DOCUMENT);
     await fixture.whenStable();
+    expect(text('app-reading-notes')).toContain('every 2 s, then every 4 s');
+    expect(text('app-reading-notes')).toContain('line 2 118The time runs backwards.');
     expect(text('app-file-list')).toContain(
       'Read, 3 lines refused7 200 framesNight of 28 Nov 2026',
     );
@@ -192,6 +213,46 @@ describe('ImportPage', () => {
     expect(text('app-file-list')).not.toContain('Not sent');
   });
 
+  it('sends one file after another, and stops one without the others', async () => {
+    const { http, page, text, pick, press } = await renderImport();
+    await pick(KNOWN, new File([KNOWN], 'second.csv'));
+    press(/^Add 2 files/);
+    const first = http.expectOne({ method: 'POST', url: importPaths.all(RIG) });
+    expect(text('app-file-list')).toContain('Waiting to be sent');
+    page.querySelector<HTMLElement>('[aria-label="Stop sending known.csv"]')!.click();
+    expect(first.cancelled).toBe(true);
+    await vi.waitFor(() => {
+      TestBed.tick();
+      http
+        .expectOne({ method: 'POST', url: importPaths.all(RIG) })
+        .flush(imported({ fileName: 'second.csv' }));
+    });
+    TestBed.tick();
+    expect(text('app-file-list')).toContain('Stopped before it had arrived');
+    press(/^Try again$/);
+    const again = http.expectOne({ method: 'POST', url: importPaths.all(RIG) });
+    expect(((again.request.body as FormData).get('file') as File).name).toBe('known.csv');
+  });
+
+  it('shows the progress of what was sent before the page was opened', async () => {
+    const { fixture, page } = await renderImport();
+    FakeEventSource.last.tell(imported({ state: 'running', progress: 0.4, stage: 'Reading' }));
+    await fixture.whenStable();
+    const bar = page.querySelector('app-earlier-imports [role=progressbar]');
+    expect(bar?.getAttribute('aria-valuenow')).toBe('40');
+  });
+
+  it('reads a file by another delimiter when a person says so', async () => {
+    const { fixture, page, text, pick } = await renderImport();
+    await pick(new File(['clock;dRA;dDec\n18:42:15;0,45;-0,67\n'], 'other.csv'));
+    expect(text('app-column-picker .header')).toBe('clockdRAdDec');
+    const delimiter = page.querySelector<HTMLSelectElement>('app-map-settings select')!;
+    delimiter.value = ',';
+    delimiter.dispatchEvent(new Event('change'));
+    await fixture.whenStable();
+    expect(text('app-column-picker .header')).not.toBe('clockdRAdDec');
+  });
+
   it('says that a file was known already', async () => {
     const { fixture, http, text, pick, press } = await renderImport();
     FakeEventSource.last.tell(imported({ state: 'done', frames: 7200, nights: ['2026-11-28'] }));
@@ -200,6 +261,8 @@ describe('ImportPage', () => {
     http
       .expectOne({ method: 'POST', url: importPaths.all(RIG) })
       .flush(imported({ state: 'done', frames: 7200, nights: ['2026-11-28'], duplicate: true }));
+    TestBed.tick();
+    http.expectOne(importPaths.document(RIG, imported({}).id)).flush(DOCUMENT);
     await fixture.whenStable();
     expect(text('app-file-list')).toContain('Known already');
     expect(text('app-file-list')).toContain('since 29 Nov 2026');

@@ -12,7 +12,7 @@ import {
 import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { RouterLink } from '@angular/router';
-import type { LogImport } from '@stillpier/contract';
+import { exportPaths, type LogImport } from '@stillpier/contract';
 import { ColumnMapsApi } from '../api/column-maps-api';
 import { ImportsApi } from '../api/imports-api';
 import { sentenceOf } from '../api/problem-error';
@@ -23,31 +23,28 @@ import { Questions } from '../form/questions';
 import { Emphasis } from '../page/emphasis';
 import { Failure } from '../page/failure';
 import { Waiting } from '../page/waiting';
-import { ColumnPicker, type ChosenColumn } from './column-picker';
 import { DropZone } from './drop-zone';
 import { EarlierImports } from './earlier-imports';
 import { FileList } from './file-list';
-import { HowRead } from './how-read';
 import { ImportDesk, type DeskFile } from './import-desk';
 import { importSentence } from './import-sentence';
-import { MapSaver } from './map-saver';
-import { StartField } from './start-field';
+import type { HandChoice } from './intake';
+import { ReadingChoice } from './reading-choice';
+import { ReadingNotes } from './reading-notes';
 
 /** Adds guide logs to a rig: previewed in the page, sent, read by the worker, each step said. */
 @Component({
   selector: 'app-import-page',
   imports: [
-    ColumnPicker,
     DropZone,
     EarlierImports,
     Emphasis,
     Failure,
     FileList,
-    HowRead,
-    MapSaver,
     MatButton,
+    ReadingChoice,
+    ReadingNotes,
     RouterLink,
-    StartField,
     Waiting,
   ],
   providers: [ImportDesk],
@@ -72,7 +69,8 @@ export class ImportPage {
     this.setups.hasValue() ? this.setups.value() : [],
   );
   protected readonly setupId = linkedSignal(() => this.setupChoices()[0]?.id ?? null);
-  private readonly maps = inject(ColumnMapsApi).list(this.rigId);
+  protected readonly maps = inject(ColumnMapsApi).known(this.rigId);
+  protected readonly archive = computed(() => exportPaths.rig(this.rigId()));
   protected readonly list = this.importsApi.list(this.rigId);
   /** As listed, and as the events have told since: what they told last wins over a list that is older. */
   private readonly imports = linkedSignal<readonly LogImport[], ReadonlyMap<string, LogImport>>({
@@ -92,9 +90,11 @@ export class ImportPage {
     const chosen = files.find((file) => file.id === this.selectedId());
     return chosen ?? files.find((file) => file.intake?.preview && !file.ready) ?? files[0] ?? null;
   });
-  protected readonly askedByHand = computed(() => {
-    const intake = this.selected()?.intake;
-    return intake?.map && !intake.savedMap && intake.missing === null ? intake : null;
+  /** What became of it on the server, once it has been read. */
+  protected readonly selectedLog = computed(() => {
+    const send = this.selected()?.send;
+    const log = send?.at === 'received' ? this.imports().get(send.importId) : undefined;
+    return log?.state === 'done' ? log : undefined;
   });
   protected readonly readyCount = computed(
     () => this.desk.files().filter((file) => file.ready && file.send === null).length,
@@ -111,7 +111,7 @@ export class ImportPage {
 
   constructor() {
     effect(() => {
-      this.desk.savedMaps.set(this.maps.hasValue() ? this.maps.value() : []);
+      this.desk.savedMaps.set(this.maps.maps());
     });
     effect(() => {
       if (this.rig.hasValue()) this.desk.timeZone.set(this.rig.value().site.timeZone);
@@ -141,9 +141,9 @@ export class ImportPage {
     this.selectedId.set(id);
   }
 
-  protected choose(file: DeskFile, { column, choice }: ChosenColumn): void {
+  protected choose(file: DeskFile, hand: HandChoice): void {
     this.selectedId.set(file.id); // a file that is ready now must not vanish under the hand
-    this.desk.choose(file, column, choice);
+    this.desk.choose(file, hand);
   }
 
   protected chooseSetup(event: Event): void {
@@ -151,20 +151,16 @@ export class ImportPage {
   }
 
   protected send(): void {
-    void this.desk.sendAll(this.rigId(), this.setupId());
+    this.desk.sendAll(this.rigId(), this.setupId());
   }
 
   protected sendAgain(file: DeskFile): void {
-    void this.desk.sendAgain(this.rigId(), this.setupId(), file);
-  }
-
-  protected reloadMaps(): void {
-    this.maps.reload();
+    this.desk.sendAgain(this.rigId(), this.setupId(), file);
   }
 
   protected async readAgain(of: LogImport): Promise<void> {
     try {
-      this.take(await this.importsApi.retry(of));
+      this.take(await this.importsApi.retry(of, {}));
     } catch (error) {
       // The import stays as it was; nothing on the page would say why.
       this.snackBar.open(`${of.fileName} is not read again. ${sentenceOf(error)}`, 'Close');

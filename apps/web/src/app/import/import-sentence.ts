@@ -19,7 +19,7 @@ export function importSentence(
   if (files.length === 0) {
     return [plain(rigName === '' ? 'Add guide logs.' : `Add guide logs to ${rigName}.`)];
   }
-  const sent = files.filter(({ send }) => send !== null);
+  const sent = files.filter(({ send }) => send !== null && send.at !== 'stopped');
   return sent.length === 0 ? beforeSending(files) : afterSending(sent, imports);
 }
 
@@ -44,7 +44,9 @@ function afterSending(sent: readonly DeskFile[], imports: ReadonlyMap<string, Lo
   const done = known.filter(({ state }) => state === 'done');
   const frames = done.reduce((sum, each) => sum + (each.frames ?? 0), 0);
   const refused = done.reduce((sum, each) => sum + (each.refusedCount ?? 0), 0);
-  const open = sent.filter(({ send }) => send?.at === 'sending').length + working(known);
+  const open =
+    sent.filter(({ send }) => send?.at === 'sending' || send?.at === 'queued').length +
+    working(known);
   return [
     ...(done.length > 0
       ? [

@@ -1,4 +1,4 @@
-import type { ColumnMap, SavedColumnMap } from '@stillpier/contract';
+import type { ColumnMap, OwnColumnMap } from '@stillpier/contract';
 import {
   type ColumnRole,
   type ColumnUnit,
@@ -16,6 +16,21 @@ export interface ColumnChoice {
   readonly unit: ColumnUnit | null;
 }
 
+/** What a column map says of a file beside its columns. */
+export type MapSettings = Omit<ColumnMap, 'columns' | 'states' | 'startTime'>;
+
+/** What a person changed of what the reader makes of a file. */
+export interface HandChoice {
+  /** A saved map that was taken by hand; what is chosen below wins over it. */
+  readonly taken: KnownMap | null;
+  readonly settings: MapSettings;
+  readonly columns: readonly ColumnChoice[] | null;
+}
+export const NOTHING_BY_HAND: HandChoice = { taken: null, settings: {}, columns: null };
+
+/** A saved map of the rig or of the person. */
+export type KnownMap = Pick<OwnColumnMap, 'id' | 'name' | 'headerCells' | 'map'>;
+
 /** What is known of a file before it is sent. */
 export interface Intake {
   /** null: the file cannot be read at all, `fault` says why. */
@@ -25,7 +40,7 @@ export interface Intake {
   readonly headerCells: readonly string[];
   readonly choices: readonly ColumnChoice[];
   /** The saved map that fits, when the headers alone are not enough. */
-  readonly savedMap: SavedColumnMap | null;
+  readonly savedMap: KnownMap | null;
   /** Why it cannot be sent yet, as a sentence. */
   readonly missing: string | null;
   /** Whether its times tell no date. */
@@ -42,27 +57,35 @@ const DATELESS_UNITS: readonly (ColumnUnit | null)[] = ['seconds', 'milliseconds
  */
 export function intakeOf(
   head: Uint8Array,
-  saved: readonly SavedColumnMap[],
-  chosen: readonly ColumnChoice[] | null,
+  saved: readonly KnownMap[],
+  { taken, settings, columns }: HandChoice,
 ): Intake {
   const bare = attempt(head, {});
   if (typeof bare === 'string') return unreadable(bare);
-  const savedMap = !chosen && bare.missing !== null ? (saved.find(fits(head)) ?? null) : null;
-  const map = chosen ? mapOf(bare, chosen) : (savedMap?.map ?? null);
-  const mapped = map ? attempt(head, map) : bare;
+  const isAsFound = columns === null && Object.keys(settings).length === 0;
+  const found = taken ?? (bare.missing === null ? undefined : saved.find(fits(head)));
+  const base: ColumnMap = { ...found?.map, ...settings };
+  const based = attempt(head, base);
   // A choice that contradicts itself (two columns of one role) is said; the table stays as it was.
-  const preview = typeof mapped === 'string' ? bare : mapped;
-  const choices = chosen ?? preview.columns.map(({ role, unit }): ColumnChoice => ({ role, unit }));
+  const map = columns ? { ...base, columns: columnsOf(orBare(based, bare), columns, base) } : base;
+  const mapped = attempt(head, map);
+  const preview = typeof mapped === 'string' ? orBare(based, bare) : mapped;
+  const choices =
+    columns ?? preview.columns.map(({ role, unit }): ColumnChoice => ({ role, unit }));
   return {
     preview,
     fault: null,
     headerCells: headerCellsOf(preview),
     choices,
-    savedMap,
+    savedMap: isAsFound ? (found ?? null) : null,
     missing: typeof mapped === 'string' ? mapped : mapped.missing,
-    needsStart: map?.startTime === undefined && tellsNoDate(preview, choices),
-    map,
+    needsStart: map.startTime === undefined && tellsNoDate(preview, choices),
+    map: isAsFound && !found ? null : map,
   };
+}
+
+function orBare(preview: GuideLogPreview | string, bare: GuideLogPreview): GuideLogPreview {
+  return typeof preview === 'string' ? bare : preview;
 }
 
 function unreadable(fault: string): Intake {
@@ -88,14 +111,19 @@ function attempt(head: Uint8Array, map: ColumnMap): GuideLogPreview | string {
   }
 }
 
-function fits(head: Uint8Array): (saved: SavedColumnMap) => boolean {
+function fits(head: Uint8Array): (saved: KnownMap) => boolean {
   return ({ headerCells, map }) => {
     const preview = attempt(head, map);
-    return (
-      typeof preview !== 'string' &&
-      JSON.stringify(headerCellsOf(preview)) === JSON.stringify(headerCells)
-    );
+    if (typeof preview === 'string') return false;
+    // A map that came as a file names no header line: it fits where it leaves nothing open.
+    if (headerCells === null) return preview.missing === null && namesHeaders(map);
+    return JSON.stringify(headerCellsOf(preview)) === JSON.stringify(headerCells);
   };
+}
+
+/** By number alone a map would fit nearly every file. */
+function namesHeaders({ columns = {} }: ColumnMap): boolean {
+  return Object.keys(columns).some((key) => !/^\d+$/.test(key));
 }
 
 function headerCellsOf(preview: GuideLogPreview): string[] {
@@ -103,22 +131,28 @@ function headerCellsOf(preview: GuideLogPreview): string[] {
   return cells.every((cell) => cell === '') ? [] : cells;
 }
 
-/** A map of what was chosen, by header text where that is one of its kind, else by number. */
-function mapOf({ columns }: GuideLogPreview, choices: readonly ColumnChoice[]): ColumnMap {
+/** The columns of a map of what was chosen, by header text where that is one of its kind, else by number. */
+function columnsOf(
+  { columns }: GuideLogPreview,
+  choices: readonly ColumnChoice[],
+  base: ColumnMap,
+): ColumnMap['columns'] {
   const named = columns.flatMap((column, i): [string, ColumnUseOfMap][] => {
     const { role, unit } = choices[i] ?? { role: null, unit: null };
     if (role === null) return [];
     const isOnly = columns.filter(({ header }) => header === column.header).length === 1;
     const key = column.header?.trim() && isOnly ? column.header : String(column.number);
     const mayDrop = UNIT_MAY_BE_LEFT_OUT.includes(role) || unit === null;
-    return [[key, mayDrop ? { role } : { role, unit: unit }]];
+    const sentinels = base.columns?.[key]?.sentinels;
+    return [[key, { role, ...(mayDrop ? {} : { unit }), ...(sentinels ? { sentinels } : {}) }]];
   });
-  return { columns: Object.fromEntries(named) };
+  return Object.fromEntries(named);
 }
 
 type ColumnUseOfMap = NonNullable<ColumnMap['columns']>[string];
 
 function tellsNoDate(preview: GuideLogPreview, choices: readonly ColumnChoice[]): boolean {
+  if (choices.some(({ role }) => role === 'date')) return false;
   const time = choices.find(({ role }) => role === 'time');
   if (!time || !DATELESS_UNITS.includes(time.unit)) return false;
   const headers = preview.columns.map(({ header }) => header ?? '');

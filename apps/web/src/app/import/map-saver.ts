@@ -9,13 +9,16 @@ import {
 } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { createColumnMapSchema, type SavedColumnMap } from '@stillpier/contract';
+import { createColumnMapSchema, type OwnColumnMap } from '@stillpier/contract';
+import * as z from 'zod';
 import { ColumnMapsApi } from '../api/column-maps-api';
 import { Field } from '../form/field';
 import { FieldInput } from '../form/field-input';
 import { FormMessage } from '../form/form-message';
 import { FormSubmission } from '../form/form-submission';
 import type { Intake } from './intake';
+
+const formSchema = createColumnMapSchema.pick({ name: true }).extend({ forAllRigs: z.boolean() });
 
 /** Keeps what was chosen for the columns, so that the next file of this kind needs no question. */
 @Component({
@@ -26,6 +29,9 @@ import type { Intake } from './intake';
     h3 {
       font: 620 15.5px/22px var(--text);
     }
+    .check {
+      margin-top: 12px;
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -35,7 +41,7 @@ export class MapSaver {
   readonly rigId = input.required<string>();
   readonly rigName = input.required<string>();
   readonly intake = input.required<Intake>();
-  readonly saved = output<SavedColumnMap>();
+  readonly saved = output<OwnColumnMap>();
 
   protected readonly submission = new FormSubmission();
   /** Of the map that was saved; another header line has its own. */
@@ -45,22 +51,19 @@ export class MapSaver {
   });
   protected readonly form = new FormGroup({
     name: new FormControl('', { nonNullable: true }),
+    forAllRigs: new FormControl(false, { nonNullable: true }),
   });
 
   protected async save(): Promise<void> {
     const { headerCells, map } = this.intake();
-    await this.submission.send(
-      this.form,
-      createColumnMapSchema.pick({ name: true }),
-      async ({ name }) => {
-        const saved = await this.columnMapsApi.create(this.rigId(), {
-          name,
-          headerCells: [...headerCells],
-          map: map ?? {},
-        });
-        this.name.set(saved.name);
-        this.saved.emit(saved);
-      },
-    );
+    await this.submission.send(this.form, formSchema, async ({ name, forAllRigs }) => {
+      const saved = await this.columnMapsApi.create(forAllRigs ? null : this.rigId(), {
+        name,
+        headerCells: [...headerCells],
+        map: map ?? {},
+      });
+      this.name.set(saved.name);
+      this.saved.emit(saved);
+    });
   }
 }

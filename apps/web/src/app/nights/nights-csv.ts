@@ -1,4 +1,5 @@
 import type { NightSummary } from '@stillpier/contract';
+import { csvText } from '../page/csv-text';
 
 const COLUMNS: readonly [string, (night: NightSummary) => string | number | null][] = [
   ['date', (night) => night.date],
@@ -17,19 +18,10 @@ const COLUMNS: readonly [string, (night: NightSummary) => string | number | null
   ['severity', (night) => night.mainLimit?.severity ?? null],
 ];
 
-/** The nights as they stand in the table, in full precision (RFC 4180). */
+/** The nights as they stand in the table, in full precision. */
 export function nightsCsv(nights: readonly NightSummary[]): string {
-  const lines = [
+  return csvText([
     COLUMNS.map(([head]) => head),
-    ...nights.map((night) => COLUMNS.map(([, value]) => cell(value(night)))),
-  ];
-  return lines.map((cells) => `${cells.join(',')}\r\n`).join('');
-}
-
-/** A leading sign that a spreadsheet takes for a formula is told apart by an apostrophe. */
-function cell(value: string | number | null): string {
-  if (value === null) return '';
-  if (typeof value === 'number') return String(value);
-  const safe = /^[=+\-@\t]/.test(value) ? `'${value}` : value;
-  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
+    ...nights.map((night) => COLUMNS.map(([, value]) => value(night))),
+  ]);
 }

@@ -14,6 +14,7 @@ import { FieldInput } from '../form/field-input';
 import { FINDING_NAMES } from '../night/finding-names';
 import { Emphasis } from '../page/emphasis';
 import { Failure } from '../page/failure';
+import { saveFile } from '../page/save-file';
 import { Waiting } from '../page/waiting';
 import { NightsTable } from './nights-table';
 import { nightsCsv } from './nights-csv';
@@ -87,12 +88,7 @@ export class NightsPage {
   }
 
   protected saveCsv(): void {
-    const file = new Blob([nightsCsv(this.shown())], { type: 'text/csv;charset=utf-8' });
-    const link = document.createElement('a');
-    link.href = URL.createObjectURL(file);
-    link.download = 'nights.csv';
-    link.click();
-    URL.revokeObjectURL(link.href);
+    saveFile('nights.csv', nightsCsv(this.shown()), 'text/csv;charset=utf-8');
   }
 }
 

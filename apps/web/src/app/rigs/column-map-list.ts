@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
 import { MatSnackBar } from '@angular/material/snack-bar';
-import { type SavedColumnMap } from '@stillpier/contract';
+import { type OwnColumnMap } from '@stillpier/contract';
 import { ColumnMapsApi } from '../api/column-maps-api';
 import { sentenceOf } from '../api/problem-error';
 import { Questions } from '../form/questions';
@@ -24,17 +24,17 @@ export class ColumnMapList {
 
   protected readonly maps = this.columnMapsApi.list(this.rigId);
 
-  protected rolesOf({ map }: SavedColumnMap): string {
+  protected rolesOf({ map }: OwnColumnMap): string {
     const roles = Object.values(map.columns ?? {}).map(({ role }) => role);
     return `${roles.filter((role) => role !== 'ignore').length} of ${roles.length} columns used`;
   }
 
-  protected headerOf({ headerCells }: SavedColumnMap): string {
+  protected headerOf({ headerCells }: OwnColumnMap): string {
     if (headerCells === null) return 'every header with the columns that it names';
     return headerCells.join(', ') || 'files without a header';
   }
 
-  protected async remove(map: SavedColumnMap): Promise<void> {
+  protected async remove(map: OwnColumnMap): Promise<void> {
     const sure = await this.questions.ask({
       title: `Delete the column map ${map.name}?`,
       text: 'Nights that were read with it stay as they are. The next log of that kind asks again what its columns mean.',
@@ -43,7 +43,7 @@ export class ColumnMapList {
     });
     if (!sure) return;
     try {
-      await this.columnMapsApi.remove(map);
+      await this.columnMapsApi.remove(this.rigId(), map);
     } catch (error) {
       // Nothing on the page shows this: the map is still in the list.
       this.snackBar.open(`The map is not deleted. ${sentenceOf(error)}`, 'Close');
