@@ -32,11 +32,12 @@ export async function signUpAndIn(page: Page, person: Person): Promise<void> {
   await signIn(page, person);
 }
 
-export async function signIn(page: Page, person: Person): Promise<void> {
+/** @param leadsTo The page that a person who signs in comes to. */
+export async function signIn(page: Page, person: Person, leadsTo = '**/rigs'): Promise<void> {
   await page.getByLabel('Email').fill(person.email);
   await page.getByLabel('Password').fill(PASSWORD);
   await page.getByRole('button', { name: 'Sign in' }).click();
-  await page.waitForURL('**/rigs');
+  await page.waitForURL(leadsTo);
 }
 
 /** Reads the mail page as a person would, until the mail is there. */
