@@ -110,9 +110,9 @@ describe('the reader of guide logs', () => {
       'The file has more than 1,234 lines, the most that are read of one file: cut it into several.';
     const reader = createLogReader({ mostLines: 1234 });
     const long = utf8(logOf(9000));
-    expect(() => reader.push(long)).toThrow(
-      expect.objectContaining({ fault: 'too-many-lines', message: sentence }),
-    );
+    expect(() => {
+      reader.push(long);
+    }).toThrow(expect.objectContaining({ fault: 'too-many-lines', message: sentence }));
     expect(MOST_LINES).toBe(2_000_000); // the limit that the project has set itself
   });
 

@@ -10,10 +10,12 @@ import {
 import {
   countClaims,
   decDriftClaim,
+  ditherClaims,
   numberClaim,
   rmsClaims,
   seeingClaim,
   setAsideClaims,
+  startClaim,
   textClaim,
   wormClaims,
 } from './night-claims';
@@ -21,7 +23,16 @@ import { ORCHARD_PIER } from './orchard-pier';
 import { ownHeaders } from './own-headers-sample';
 import { withLines } from './rewrite-table';
 import type { GoodSample } from './sample';
-import { CALM, POLAR_DRIFT, STRAIN_WAVE, THREE_TARGETS, UNGUIDED, WORM } from './sample-scenarios';
+import {
+  CALM,
+  POLAR_DRIFT,
+  STRAIN_WAVE,
+  THREE_TARGETS,
+  UNGUIDED,
+  UNMARKED,
+  WORM,
+} from './sample-scenarios';
+import { turnedCamera } from './turned-camera-sample';
 
 const GUIDE_SCALE = plateScaleArcsecPerPx(3.75, 1, 200);
 
@@ -38,6 +49,8 @@ export function goodSamples(): GoodSample[] {
     unguided(),
     strainWave(),
     roughEdges(),
+    unmarkedDithers(),
+    turnedCamera(),
   ];
 }
 
@@ -66,7 +79,7 @@ function wormNight(): GoodSample {
       },
     },
     claims: [
-      textClaim('runs[0].start', 'start', '2026-03-15T01:12:00Z'),
+      startClaim(night),
       ...countClaims(night, 0),
       ...rmsClaims(night, 0),
       ...wormClaims(WORM, 0),
@@ -99,7 +112,13 @@ function polarDrift(): GoodSample {
 }
 
 function guidePixels(): GoodSample {
-  const dialect = { ...NO_SKY, guidePixelArcsec: GUIDE_SCALE, decimals: 4, state: false };
+  const dialect: CsvDialect = {
+    ...NO_SKY,
+    time: 'timestamp',
+    guidePixelArcsec: GUIDE_SCALE,
+    decimals: 4,
+    state: false,
+  };
   const { night, csv } = sample(CALM, 103, dialect);
   return {
     file: 'guide-pixels.csv',
@@ -109,6 +128,7 @@ function guidePixels(): GoodSample {
     content: csv,
     rig: ORCHARD_PIER,
     claims: [
+      startClaim(night),
       numberClaim('optics.guideScaleArcsecPerPx', 'guide scale', '″/px', 3.8675, 0.0001),
       ...countClaims(night, 0),
       ...rmsClaims(night, 0, 0.002),
@@ -126,6 +146,7 @@ function threeTargets(): GoodSample {
     content: csv,
     rig: ORCHARD_PIER,
     claims: [
+      startClaim(night),
       numberClaim('runs.length', 'runs', '', 3, 0),
       ...THREE_TARGETS.runs.flatMap(({ target }, run) => [
         textClaim(`runs[${run}].target`, `target of run ${run + 1}`, target),
@@ -146,9 +167,10 @@ function unguided(): GoodSample {
     shows:
       'Two hours with the guider switched off and no corrections in the log, at declination 30°: the RA error is the worm itself.',
     night,
-    content: toCsv(frames, { ...NO_SKY, state: false }),
+    content: toCsv(frames, { ...NO_SKY, time: 'timestamp', state: false }),
     rig: ORCHARD_PIER,
     claims: [
+      startClaim(night),
       ...countClaims(night, 0),
       ...rmsClaims(night, 0),
       textClaim('runs[0].spectrum.ra.peaks[0].label', 'strongest line in RA', 'worm'),
@@ -224,6 +246,25 @@ function roughEdges(): GoodSample {
       ...refused(3, 500, 'the line has 1 column instead of 6'),
       ...countClaims(night, 0),
       ...rmsClaims(night, 0),
+    ],
+  };
+}
+
+function unmarkedDithers(): GoodSample {
+  const dialect: CsvDialect = { ...NO_SKY, time: 'timestamp', state: false };
+  const { night, csv } = sample(UNMARKED, 109, dialect);
+  return {
+    file: 'unmarked-dithers.csv',
+    shows:
+      'Two hours with a dither every quarter of an hour and no column that tells of them: they are found by their shape and set aside.',
+    night,
+    content: csv,
+    rig: ORCHARD_PIER,
+    claims: [
+      startClaim(night),
+      numberClaim('runs[0].frames', 'frames', '', night.frames.count, 0),
+      ...ditherClaims(night, 0),
+      ...rmsClaims(night, 0, 0.03),
     ],
   };
 }

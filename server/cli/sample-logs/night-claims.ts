@@ -25,6 +25,12 @@ function guidedRms(night: SimulatedNight, run: number, errors: Float64Array): nu
   return Math.sqrt(used.reduce((sum, error) => sum + (error - mean) ** 2, 0) / used.length);
 }
 
+/** For logs whose times tell the instant. */
+export function startClaim({ frames }: SimulatedNight): Claim {
+  const start = new Date((frames.startEpochSeconds ?? NaN) * 1000).toISOString();
+  return textClaim('runs[0].start', 'start', start.replace('.000Z', 'Z'));
+}
+
 export function countClaims(night: SimulatedNight, run: number): Claim[] {
   const at = `runs[${run}]`;
   const count = (key: string, says: string, value: number): Claim => ({
@@ -42,17 +48,38 @@ export function countClaims(night: SimulatedNight, run: number): Claim[] {
 
 /** How many frames are set aside as a dither or its settling, and for want of a star. */
 export function setAsideClaims(night: SimulatedNight, run: number): Claim[] {
-  const sum = (reason: string, value: number): Claim => ({
+  return [
+    setAsideClaim(run, 'dither', countState(night, run, DITHER)),
+    setAsideClaim(run, 'settling', countState(night, run, SETTLING)),
+    setAsideClaim(run, 'star lost', countState(night, run, STAR_LOST)),
+  ];
+}
+
+function setAsideClaim(run: number, reason: string, frames: number): Claim {
+  return {
     path: `runs[${run}].setAside[${reason}].frames`,
     says: `frames set aside as ${reason}`,
     unit: '',
-    value,
+    value: frames,
     within: 0,
-  });
+  };
+}
+
+/**
+ * The same where no column tells of dithers. Every one is found; but the star has settled for the analysis only when it
+ * has stayed at rest for three frames, so that many for each may be set aside beside those that were simulated.
+ */
+export function ditherClaims(night: SimulatedNight, run: number): Claim[] {
+  const dithers = countState(night, run, DITHER);
   return [
-    sum('dither', countState(night, run, DITHER)),
-    sum('settling', countState(night, run, SETTLING)),
-    sum('star lost', countState(night, run, STAR_LOST)),
+    setAsideClaim(run, 'dither', dithers),
+    {
+      path: `runs[${run}].used`,
+      says: 'frames that count',
+      unit: '',
+      value: countState(night, run, GUIDING),
+      within: 3 * dithers,
+    },
   ];
 }
 

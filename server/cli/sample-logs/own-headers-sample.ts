@@ -48,7 +48,7 @@ export function ownHeaders(): GoodSample {
     correctionSign: 'same',
     targetDeclinationDegrees: 20,
     targetHourAngleHours: -1.5,
-    startTime: '2026-03-14T22:55:00-04:00',
+    startTime: '2026-03-20T22:55:00-04:00',
   };
   return {
     file: 'own-headers.tsv',
@@ -63,7 +63,7 @@ export function ownHeaders(): GoodSample {
     rig: ORCHARD_PIER,
     map,
     claims: [
-      textClaim('runs[0].start', 'start', '2026-03-15T02:55:00Z'),
+      textClaim('runs[0].start', 'start', '2026-03-21T02:55:00Z'),
       ...countClaims(night, 0),
       ...setAsideClaims(night, 0),
       ...rmsClaims(night, 0),

@@ -1,8 +1,10 @@
 import { type NightScenario, PLAIN_NIGHT, type RunScenario } from '@stillpier/analysis';
 
 const HOUR = 3600;
-/** 21:12 in the evening of 14 March 2026 at four hours west of Greenwich. */
-const EVENING = Date.UTC(2026, 2, 15, 1, 12) / 1000;
+/** Instant of 21:12 in the evening of a day of March 2026, by a clock four hours behind UTC. */
+function evening(day: number): number {
+  return Date.UTC(2026, 2, day + 1, 1, 12) / 1000;
+}
 /** One turn of a worm on a wheel of 180 teeth: sidereal day / 180. */
 const WORM_180_SECONDS = 86_164.0905 / 180;
 
@@ -20,7 +22,7 @@ function run(change: Partial<RunScenario>): RunScenario {
 
 const night: NightScenario = {
   ...PLAIN_NIGHT,
-  startEpochSeconds: EVENING,
+  startEpochSeconds: evening(14),
   latitudeDegrees: 45,
   runs: [run({})],
 };
@@ -46,6 +48,7 @@ export const WORM: NightScenario = {
 /** A polar axis that is 9 arcminutes off. */
 export const POLAR_DRIFT: NightScenario = {
   ...night,
+  startEpochSeconds: evening(15),
   runs: [run({ durationSeconds: 2.5 * HOUR, declinationDegrees: 12, hourAngleHours: -0.8 })],
   polar: { azimuthArcmin: 8, altitudeArcmin: -4 },
   seeing: { whiteSigmaArcsec: 0.6, correlated: { sigmaArcsec: 0, memorySeconds: 5 } },
@@ -54,6 +57,7 @@ export const POLAR_DRIFT: NightScenario = {
 /** A good mount on a night of good seeing. */
 export const CALM: NightScenario = {
   ...night,
+  startEpochSeconds: evening(18),
   runs: [run({ durationSeconds: 2 * HOUR, declinationDegrees: 58 })],
   drive: {
     ...night.drive,
@@ -68,14 +72,25 @@ export const CALM: NightScenario = {
 /** Before and past midnight, with a few dithers. */
 export const LATE: NightScenario = {
   ...CALM,
-  startEpochSeconds: Date.UTC(2026, 2, 15, 2, 55) / 1000,
+  startEpochSeconds: Date.UTC(2026, 2, 21, 2, 55) / 1000,
   runs: [run({ durationSeconds: 2 * HOUR, declinationDegrees: 20 })],
   dithers: { everySeconds: 900, sizeArcsec: 5, settledArcsec: 1.2 },
 };
 
+/** Dithers that no column tells of: they have to be found by their shape. */
+export const UNMARKED: NightScenario = {
+  ...CALM,
+  startEpochSeconds: evening(23),
+  dithers: { everySeconds: 900, sizeArcsec: 6, settledArcsec: 1 },
+};
+
+/** A guide camera that is turned, on a night with a few dithers. */
+export const TURNED: NightScenario = { ...LATE, startEpochSeconds: evening(25) };
+
 /** Three targets on both sides of the pier, dithers, and clouds in the second run. */
 export const THREE_TARGETS: NightScenario = {
   ...night,
+  startEpochSeconds: evening(16),
   runs: [
     run({ target: 'Lantern Nebula', durationSeconds: 1.4 * HOUR }),
     run({
@@ -102,6 +117,7 @@ export const THREE_TARGETS: NightScenario = {
 /** Nobody guides: the whole motion of the worm is in the log. */
 export const UNGUIDED: NightScenario = {
   ...WORM,
+  startEpochSeconds: evening(22),
   runs: [run({ durationSeconds: 2 * HOUR, declinationDegrees: 30 })],
   drive: { ...WORM.drive, lines: [] },
   guider: {

@@ -8,6 +8,8 @@ export function samplesReadme({ ok, notOk }: ExpectedSamples): string {
     "Guide logs that the project's own simulator made, with fixed random starts: `npm run samples` makes them anew.",
     'Rigs, places and targets are invented. `expected.json` holds the figures below, and a test reads every log and',
     'checks them. RMS and counts are those of the simulated frames; worm, drift and seeing are those that were put in.',
+    'The logs of Orchard pier whose times tell a date are of seven evenings of March 2026, so that all of them can be',
+    'dropped on one rig.',
     '',
     '    npm run --silent analyse -- samples/ok/worm-night.csv --rig samples/ok/worm-night.rig.json',
     '',
