@@ -68,7 +68,7 @@ it('a stream tells first what is there, then each change to the end', async () =
   const progress = told.map((event) => event.progress);
   expect(progress).toEqual([...progress].sort((a, b) => a - b));
   expect(told.map(({ stage }) => stage)).toEqual(
-    expect.arrayContaining(['Waiting for its turn', 'Reading the lines', 'Done']),
+    expect.arrayContaining(['Reading the lines', 'Done']), // it may wait too briefly to be told
   );
 });
 

@@ -7,7 +7,7 @@ import { build } from 'esbuild';
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
 const outdir = join(root, 'dist/bench');
-const all = ['read-log', 'analyse-night'];
+const all = ['read-log', 'analyse-night', 'busy-web'];
 const asked = all.filter((name) => argv.length === 2 || argv.includes(name));
 
 await build({
