@@ -10,12 +10,22 @@ import { Field } from '../form/field';
 import { FieldInput } from '../form/field-input';
 import { FormMessage } from '../form/form-message';
 import { FormSubmission } from '../form/form-submission';
+import { ColumnMapList } from '../rigs/column-map-list';
 import { SignOut } from '../shell/sign-out';
 import { TokenList } from './token-list';
 
 @Component({
   selector: 'app-account-page',
-  imports: [DatePipe, Field, FieldInput, FormMessage, MatButton, ReactiveFormsModule, TokenList],
+  imports: [
+    ColumnMapList,
+    DatePipe,
+    Field,
+    FieldInput,
+    FormMessage,
+    MatButton,
+    ReactiveFormsModule,
+    TokenList,
+  ],
   templateUrl: './account-page.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { class: 'ruled' },

@@ -61,6 +61,12 @@ export class ColumnMapsApi {
     return anyColumnMapSchema.parse(answer);
   }
 
+  /** The new name first, then the old one goes: a break in between leaves both, never none. */
+  async rename(owner: MapOwner, known: OwnColumnMap, name: string): Promise<void> {
+    await this.create(owner, { name, headerCells: known.headerCells, map: known.map });
+    await this.remove(owner, known);
+  }
+
   async remove(owner: MapOwner, { id }: OwnColumnMap): Promise<void> {
     await firstValueFrom(this.http.delete(pathsOf(owner).one(id)));
   }

@@ -10,7 +10,7 @@ import {
 import { MatButton } from '@angular/material/button';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { Router, RouterLink } from '@angular/router';
-import { type Rig } from '@stillpier/contract';
+import { exportPaths, type Rig } from '@stillpier/contract';
 import { sentenceOf } from '../api/problem-error';
 import { RigsApi } from '../api/rigs-api';
 import { type HoldsEdits } from '../form/keep-edits-guard';
@@ -44,6 +44,7 @@ export class RigSettingsPage implements HoldsEdits {
   protected readonly rig = linkedSignal(() =>
     this.loaded.hasValue() ? this.loaded.value() : undefined,
   );
+  protected readonly archive = computed(() => exportPaths.rig(this.rigId()));
   protected readonly mayEdit = computed(() => this.rig()?.role !== 'advisor');
 
   hasUnsavedEdits(): boolean {
