@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { knownHeader } from './known-headers';
 
-// The words and units are the project's own (the list of recognised header names in the README of the column map).
+// The words are the project's own; the ways of writing a unit are common practice, no source.
 describe('a header text', () => {
   it.each([
     ['RA error (arcsec)', 'raError', 'arcsec'],

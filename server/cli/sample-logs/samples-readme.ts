@@ -38,8 +38,33 @@ export function samplesReadme({ ok, notOk }: ExpectedSamples): string {
       return `| \`${file}\` | ${shows}${withMap} | ${complaint} |`;
     }),
     '',
+    ...COLUMN_MAPS,
   ].join('\n');
 }
+
+const COLUMN_MAPS = [
+  '## Column maps',
+  '',
+  'A column map says what a log does not say of itself; every key may be left out. `own-headers.map.json` and',
+  '`turned-camera.map.json` are two.',
+  '',
+  '| key | what it says |',
+  '| --- | --- |',
+  '| `delimiter`, `decimal`, `headerLine`, `comment` | how the file is written; `headerLine` 0 says that it has no header |',
+  '| `columns` | by header text or number from 1: `role`, `unit` and `sentinels` of a column |',
+  '| `sentinels` of a column | cells that mean "no value", as a blank or NaN does without being named: `["-1", "n/a"]`. Nothing else is taken for one |',
+  '| `states` | by text in the state column: guiding, dither, settling, star lost or ignore |',
+  '| `correctionSign` | whether a correction of +1 moves the star towards +error (`same`) or not (`opposite`) |',
+  '| `dateOrder` | `day-month-year` or `month-day-year`, for dates whose year stands last; it must be given where both can be read |',
+  '| `cameraAngleDegrees` | for the roles `xError` and `yError`: the angle from growing x to growing RA error (east), turning towards growing y. Growing Dec error (north) lies a quarter turn further on: RA = x cos θ + y sin θ, Dec = y cos θ - x sin θ. With x to the right and y downwards in a picture that is not mirrored, north up has 180° |',
+  '| `cameraMirrored` | Dec lies a quarter turn back instead: its sign changes |',
+  '| `targetDeclinationDegrees`, `targetHourAngleHours` | where the log pointed, the hour angle at its first frame |',
+  '| `startTime` | the instant of the first frame, where the times tell no date |',
+  '',
+  'A column with the role `date` and one with the role `time` and the unit `clock` are read together. A log of several runs',
+  'may have a header above each: the columns may change places, but time and errors must be there in the units of the first.',
+  '',
+];
 
 function value({ value, within, unit }: Claim): string {
   if (value === null) return 'none';

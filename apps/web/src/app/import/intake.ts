@@ -155,6 +155,7 @@ function tellsNoDate(preview: GuideLogPreview, choices: readonly ColumnChoice[])
   if (choices.some(({ role }) => role === 'date')) return false;
   const time = choices.find(({ role }) => role === 'time');
   if (!time || !DATELESS_UNITS.includes(time.unit)) return false;
+  if (choices.some(({ role }) => role === 'date')) return false;
   const headers = preview.columns.map(({ header }) => header ?? '');
   return !headers.some((header) => knownHeader(header)?.unit === 'iso');
 }
