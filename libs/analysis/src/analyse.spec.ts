@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { analyseLog, analyseLogWithSeries } from './analyse';
-import { type Reading } from './analysis-document';
+import { NO_READING, unexplainedNulls } from './document-fixture';
 import { type RigDescription } from './rig-description';
 import { plainFrames } from './series/frames-fixture';
 import { FRAME_STATES, type LogFrames } from './series/log-frames';
@@ -9,18 +9,7 @@ import { PLAIN_NIGHT } from './simulation/night-scenario';
 import { RandomSource } from './simulation/random-source';
 import { simulateNight } from './simulation/simulate-night';
 
-const reading: Reading = {
-  lines: 0,
-  frames: 0,
-  refusedCount: 0,
-  refused: [],
-  delimiter: ',',
-  decimal: '.',
-  encoding: 'utf-8',
-  headerLine: 1,
-  columns: {},
-  warnings: [],
-};
+const reading = NO_READING;
 const rig: RigDescription = {
   mount: { wormPeriodSeconds: 480, guideRateSidereal: 0.5 },
   imaging: { focalLengthMm: 530, apertureMm: 106, pixelUm: 3.76 },
@@ -37,15 +26,6 @@ const noise = (count: number, seed: number, spacing = 2): LogFrames => {
   );
 };
 
-/** Every path at which the document holds null, and whether a reason stands beside it. */
-function unexplainedNulls(node: unknown, path: string, why: Record<string, string>): string[] {
-  if (node === null) return why[path] === undefined || why[path] === '' ? [path] : [];
-  if (typeof node !== 'object') return [];
-  if (Array.isArray(node)) return [];
-  return Object.entries(node).flatMap(([key, value]) =>
-    key === 'whyMissing' ? [] : unexplainedNulls(value, path === '' ? key : `${path}.${key}`, why),
-  );
-}
 /** JSON writes NaN and infinities as null: a document without them comes back as it went. */
 const survivesJson = (document: object) => {
   expect(JSON.parse(JSON.stringify(document))).toEqual(document);

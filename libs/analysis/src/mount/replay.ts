@@ -42,6 +42,9 @@ export interface ReplayableAxes {
   readonly dec: ReplayableAxis;
 }
 
+/** A loop of this gain or more does not settle (REFERENCE 11): the corrections of a night that held are not what they say. */
+const RUNS_AWAY_GAIN = 2;
+
 /** Both axes of a run, or null where one of them cannot be replayed. O(n). */
 export function replayableAxes(run: RunSeries, motion: MountMotion): ReplayableAxes | null {
   const ra = replayableAxis(run, motion, 'ra');
@@ -50,7 +53,8 @@ export function replayableAxes(run: RunSeries, motion: MountMotion): ReplayableA
 }
 
 /**
- * One axis of a run, or null where the log does not tell what its corrections moved, or the gain that they were given with.
+ * One axis of a run, or null where the log does not tell what its corrections moved, or the gain that they were given with, or
+ * tells a gain at which no loop holds.
  * O(n).
  */
 export function replayableAxis(
@@ -64,7 +68,7 @@ export function replayableAxis(
   if (uncorrectedArcsec === null || smoothArcsec === null || driftArcsec === null) return null;
   const guided = commandArcsec.some((command) => command !== 0);
   const gain = guided ? motion.loop[axis]?.gain : 0;
-  if (gain === null || gain === undefined) return null;
+  if (gain === null || gain === undefined || gain >= RUNS_AWAY_GAIN) return null;
 
   const error = axis === 'ra' ? run.raErrorArcsec : run.decErrorArcsec;
   const moved = summedBefore(displacementArcsec);

@@ -5,8 +5,15 @@ import { type LogFrames, PIER_SIDES } from './log-frames';
 import { type RunSeries } from './run-series';
 import { type ByHandRange, setAsideFrames } from './set-aside';
 
+/** A whole turn of the sky: an error beyond it is no error of a star. */
+const WHOLE_TURN_ARCSEC = 1_296_000;
+/** No guider corrects for a day, or by a whole turn. */
+const LARGEST_CORRECTION = { ms: 86_400_000, arcsec: WHOLE_TURN_ARCSEC };
+
 /**
- * One run of a log in arcseconds on the sky, with the frames that do not count marked. O(n).
+ * One run of a log in arcseconds on the sky, with the frames that do not count marked. A number
+ * that no sky and no guider has (an overflow, a wrong column) tells nothing: the frame is then without a star, or without
+ * a correction. O(n).
  *
  * @param range At least one frame; the cadence of a single one is 0.
  * @param arcsecPerUnit 1 for a log in arcseconds, the guide scale for one in guide pixels.
@@ -22,11 +29,15 @@ export function prepareRun(
   const start = at(frames.timeSeconds, from);
   const timeSeconds = frames.timeSeconds.slice(from, to).map((time) => time - start);
   const inArcsec = (errors: Float64Array): Float64Array =>
-    errors.slice(from, to).map((error) => error * arcsecPerUnit);
+    errors.slice(from, to).map((error) => {
+      const arcsec = error * arcsecPerUnit;
+      return Math.abs(arcsec) <= WHOLE_TURN_ARCSEC ? arcsec : NaN;
+    });
   const raErrorArcsec = inArcsec(frames.raError);
   const decErrorArcsec = inArcsec(frames.decError);
+  const largest = LARGEST_CORRECTION[frames.correctionUnit];
   const correction = (values: Float64Array | null): Float64Array | null =>
-    values?.slice(from, to).map((value) => (Number.isFinite(value) ? value : 0)) ?? null;
+    values?.slice(from, to).map((value) => (Math.abs(value) <= largest ? value : 0)) ?? null;
   const { setAside, ditherFrames } = setAsideFrames(
     timeSeconds,
     raErrorArcsec,

@@ -48,6 +48,19 @@ describe('cutting a log into runs', () => {
   });
 });
 
+it('a number that no sky and no guider has is no star and no correction', () => {
+  const frames = {
+    ...still([0, 2, 4]),
+    raError: Float64Array.of(0.1, 1e150, 0.2),
+    raCorrection: Float64Array.of(-50, 1e12, Infinity),
+  };
+  const run = prepareRun(frames, { from: 0, to: 3 }, 1, []);
+  expect(setAsideStretches(run)).toEqual([
+    { fromSeconds: 2, toSeconds: 4, frames: 1, reason: 'star lost' },
+  ]);
+  expect([...run.raCorrection!]).toEqual([-50, 0, 0]);
+});
+
 /** 400 frames of seeing at 0.5 ″ with whatever is added. */
 const night = (add: (i: number, axis: 'ra' | 'dec') => number, guided: boolean): LogFrames => {
   const random = new RandomSource(5);
