@@ -15,6 +15,12 @@ const FEWEST_FRAMES = 3;
 const DITHER = SET_ASIDE_CODES.indexOf('dither');
 const SETTLING = SET_ASIDE_CODES.indexOf('settling');
 
+/** What a forecast needs of a run: all its frames, as in `RunSeries`. */
+export type SubFrames = Pick<
+  RunSeries,
+  'count' | 'timeSeconds' | 'cadenceSeconds' | 'raErrorArcsec' | 'decErrorArcsec' | 'setAside'
+>;
+
 /**
  * The run cut into consecutive subs of one length, and the star's aspect in each. A sub starts at the first frame
  * that counts; a dither or settling frame, or a gap of over 60 s between frames that count, ends what has begun, and
@@ -24,7 +30,7 @@ const SETTLING = SET_ASIDE_CODES.indexOf('settling');
  * @param keepAspect Largest aspect ratio that the owner keeps.
  */
 export function subForecast(
-  series: RunSeries,
+  series: SubFrames,
   lengthSeconds: number,
   seeingFwhmArcsec: number,
   keepAspect: number,
@@ -48,7 +54,7 @@ export function subForecast(
 }
 
 /** The frames that count of each whole sub. A frame stands for the cadence that follows it. */
-function cutSubs(series: RunSeries, lengthSeconds: number): number[][] {
+function cutSubs(series: SubFrames, lengthSeconds: number): number[][] {
   const { timeSeconds, setAside, cadenceSeconds, count } = series;
   // Frames seldom fall on the very second on which a sub ends: half a cadence is granted.
   const wholeFrom = lengthSeconds - cadenceSeconds / 2;
@@ -74,7 +80,7 @@ function cutSubs(series: RunSeries, lengthSeconds: number): number[][] {
  * square of that chance, (E² + N²)/(2m) + (E·N + EN²)/m with m = n − 1, is taken off the square of the elongation
  * (the sampling variances of a Gaussian's covariance).
  */
-function errorCovariance(series: RunSeries, frames: readonly number[]): ErrorCovariance {
+function errorCovariance(series: SubFrames, frames: readonly number[]): ErrorCovariance {
   const ra = pick(series.raErrorArcsec, frames);
   const dec = pick(series.decErrorArcsec, frames);
   const east = covariance(ra, ra);

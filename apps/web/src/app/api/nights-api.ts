@@ -11,7 +11,7 @@ import {
   spectrumCurveSchema,
 } from '@stillpier/contract';
 import { firstValueFrom } from 'rxjs';
-import { ERROR_CHANNELS, readRunStretch, type RunStretch } from './run-stretch';
+import { ERROR_CHANNELS, joinedStretches, readRunStretch, type RunStretch } from './run-stretch';
 
 const nightPageSchema = pageOf(nightSummarySchema);
 /** The most that a page of a list may hold: five years of two nights in three. */
@@ -61,6 +61,30 @@ export class NightsApi {
   /** A stretch of one run, finer than the whole of it came. */
   stretch(request: Signal<StretchRequest | undefined>): ResourceRef<RunStretch | undefined> {
     return resource({ params: request, loader: ({ params }) => this.read(params) });
+  }
+
+  /** Every frame of whole runs, by run id, one run after the other: long ones come in several answers. */
+  frames(
+    requests: Signal<readonly StretchRequest[] | undefined>,
+  ): ResourceRef<ReadonlyMap<string, RunStretch> | undefined> {
+    return resource({
+      params: requests,
+      loader: async ({ params }) => {
+        const frames = new Map<string, RunStretch>();
+        for (const request of params) frames.set(request.runId, await this.readWhole(request));
+        return frames;
+      },
+    });
+  }
+
+  private async readWhole(request: StretchRequest): Promise<RunStretch> {
+    const stretch = await this.read(request);
+    if (!stretch.thinned) return stretch;
+    const middle = (request.fromSeconds + request.toSeconds) / 2;
+    return joinedStretches([
+      await this.readWhole({ ...request, toSeconds: middle }),
+      await this.readWhole({ ...request, fromSeconds: middle }),
+    ]);
   }
 
   spectrum(

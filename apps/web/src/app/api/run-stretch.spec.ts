@@ -1,4 +1,4 @@
-import { readRunStretch } from './run-stretch';
+import { joinedStretches, readRunStretch } from './run-stretch';
 
 /** As the contract lays it out: n, thinned, times, then the columns. */
 function answerOf(thinned: boolean, ...columns: number[][]): ArrayBuffer {
@@ -20,7 +20,7 @@ describe('readRunStretch', () => {
     expect([...stretch.ra.leastArcsec]).toEqual([0.5, NaN, -0.25]);
     expect(stretch.ra.greatestArcsec).toBe(stretch.ra.leastArcsec);
     expect([...stretch.dec.leastArcsec]).toEqual([1, 2, 3]);
-    expect([...stretch.setAside]).toEqual([0, 1, 1]);
+    expect([...stretch.setAside]).toEqual([0, 3, 1]);
   });
 
   it('reads least and greatest of thinned steps', () => {
@@ -30,11 +30,24 @@ describe('readRunStretch', () => {
     expect([...stretch.ra.leastArcsec]).toEqual([-1, -2]);
     expect([...stretch.ra.greatestArcsec]).toEqual([1, 2]);
     expect([...stretch.dec.greatestArcsec]).toEqual([3, 4]);
-    expect([...stretch.setAside]).toEqual([0, 1]); // one dithered frame in the second step
+    expect([...stretch.setAside]).toEqual([0, 2]); // the greatest code of the second step
   });
 
   it('refuses an answer that is cut off', () => {
     const whole = answerOf(false, [0, 2], [1, 2], [3, 4], [0, 0]);
     expect(() => readRunStretch(whole.slice(0, 30), 0, 2)).toThrow(RangeError);
+  });
+});
+
+describe('joinedStretches', () => {
+  it('puts stretches one after the other, a frame on their seam once', () => {
+    const first = readRunStretch(answerOf(false, [0, 2, 4], [1, 2, 3], [4, 5, 6], [0, 0, 1]), 0, 4);
+    const second = readRunStretch(answerOf(false, [0, 2], [3, 7], [6, 8], [1, 0]), 4, 8);
+    const whole = joinedStretches([first, second]);
+    expect([...whole.timeSeconds]).toEqual([0, 2, 4, 6]);
+    expect([...whole.ra.leastArcsec]).toEqual([1, 2, 3, 7]);
+    expect([...whole.dec.greatestArcsec]).toEqual([4, 5, 6, 8]);
+    expect([...whole.setAside]).toEqual([0, 0, 1, 0]);
+    expect([whole.fromSeconds, whole.toSeconds, whole.thinned]).toEqual([0, 8, false]);
   });
 });

@@ -21,12 +21,14 @@ export interface RunStretch {
   readonly timeSeconds: Float64Array;
   readonly ra: Extent;
   readonly dec: Extent;
-  /** 1 where the step holds a frame that is set aside. */
+  /** Codes of the analysis, 0 kept; where thinned, the greatest of the step. */
   readonly setAside: Uint8Array;
 }
 
 const HEAD_BYTES = 8;
 const FLOAT_BYTES = 4;
+/** Times come as Float32 from the start of their stretch: two of one frame differ by rounding alone. */
+const SAME_SECONDS = 0.01;
 
 /** @throws {RangeError} When the answer is shorter than its head says. */
 export function readRunStretch(
@@ -57,11 +59,41 @@ export function readRunStretch(
     timeSeconds: Float64Array.from(times, (seconds) => fromSeconds + seconds),
     ra: extent(0),
     dec: extent(1),
-    setAside: Uint8Array.from(extent(2).greatestArcsec, (code) => (code > 0 ? 1 : 0)),
+    setAside: Uint8Array.from(extent(2).greatestArcsec),
   };
 }
 
 function littleEndianFloats(buffer: ArrayBuffer, offset: number, count: number): Float32Array {
   const view = new DataView(buffer, offset, count * FLOAT_BYTES);
   return Float32Array.from({ length: count }, (_, i) => view.getFloat32(i * FLOAT_BYTES, true));
+}
+
+/** Stretches that follow each other as one; a frame on the seam of two stands in both and is taken once. */
+export function joinedStretches(stretches: readonly RunStretch[]): RunStretch {
+  const kept = stretches.map((stretch, i) => {
+    const seamSeconds = stretches[i - 1]?.timeSeconds.at(-1) ?? -Infinity;
+    const from = stretch.timeSeconds.findIndex((seconds) => seconds > seamSeconds + SAME_SECONDS);
+    return { stretch, from: from < 0 ? stretch.timeSeconds.length : from };
+  });
+  const floats = (part: (stretch: RunStretch) => Float32Array): Float32Array =>
+    Float32Array.from(kept.flatMap(({ stretch, from }) => [...part(stretch).subarray(from)]));
+  return {
+    fromSeconds: stretches[0]?.fromSeconds ?? 0,
+    toSeconds: stretches.at(-1)?.toSeconds ?? 0,
+    thinned: stretches.some(({ thinned }) => thinned),
+    timeSeconds: Float64Array.from(
+      kept.flatMap(({ stretch, from }) => [...stretch.timeSeconds.subarray(from)]),
+    ),
+    ra: {
+      leastArcsec: floats(({ ra }) => ra.leastArcsec),
+      greatestArcsec: floats(({ ra }) => ra.greatestArcsec),
+    },
+    dec: {
+      leastArcsec: floats(({ dec }) => dec.leastArcsec),
+      greatestArcsec: floats(({ dec }) => dec.greatestArcsec),
+    },
+    setAside: Uint8Array.from(
+      kept.flatMap(({ stretch, from }) => [...stretch.setAside.subarray(from)]),
+    ),
+  };
 }

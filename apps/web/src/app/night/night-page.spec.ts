@@ -9,6 +9,7 @@ import {
   type NightRun,
   nightPaths,
   type Run,
+  setupPaths,
 } from '@stillpier/contract';
 import { FakeEventSource } from '../../testing/fake-event-source';
 import { NightPage } from './night-page';
@@ -176,6 +177,7 @@ async function renderNight(night: Night = NIGHT) {
   TestBed.tick();
   const http = TestBed.inject(HttpTestingController);
   http.expectOne(nightPaths.one(RIG, DATE)).flush(night);
+  http.expectOne(setupPaths.all(RIG)).flush([]);
   await vi.waitFor(() => {
     TestBed.tick();
     const asked = http.match((request) => request.url.endsWith('/series'));
@@ -263,6 +265,7 @@ describe('NightPage', () => {
     fixture.componentRef.setInput('rigId', RIG);
     fixture.componentRef.setInput('date', DATE);
     TestBed.tick();
+    TestBed.inject(HttpTestingController).expectOne(setupPaths.all(RIG)).flush([]);
     TestBed.inject(HttpTestingController)
       .expectOne(nightPaths.one(RIG, DATE))
       .flush({ type: 'not-found' }, { status: 404, statusText: 'not found' });

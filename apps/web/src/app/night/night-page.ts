@@ -10,6 +10,7 @@ import {
 import { RouterLink } from '@angular/router';
 import { NightsApi, type StretchRequest } from '../api/nights-api';
 import { RigsApi } from '../api/rigs-api';
+import { SetupsApi } from '../api/setups-api';
 import { nightDatesText, zoneOffsetText } from '../figures/clock';
 import { countedText, countText, percentText } from '../figures/measure-text';
 import { roundelHalfWidthArcsec } from '../figures/roundel/star-shape';
@@ -146,6 +147,30 @@ export class NightPage {
     source: this.chosenId,
     computation: () => null,
   });
+
+  /** Runs that came thinned, once more in full: a sub is predicted from every frame. */
+  private readonly fullRuns = this.nightsApi.frames(
+    computed(() => {
+      if (!this.stretches.hasValue()) return undefined;
+      const thinned = this.stretches.value();
+      return this.runs()
+        .filter(({ id, of }) => of.run.subs && thinned.get(id)?.thinned)
+        .map(({ id, of }) => ({
+          rigId: this.rigId(),
+          runId: id,
+          fromSeconds: 0,
+          toSeconds: of.run.durationSeconds,
+        }));
+    }),
+  );
+  protected readonly frames = computed(() => {
+    const whole = [...this.stretchOf()].filter(([, stretch]) => !stretch.thinned);
+    return new Map([...whole, ...(this.fullRuns.hasValue() ? this.fullRuns.value() : [])]);
+  });
+  private readonly setupList = inject(SetupsApi).list(this.rigId);
+  protected readonly setups = computed(() =>
+    this.setupList.hasValue() ? this.setupList.value() : [],
+  );
 
   private readonly wanted = signal<StretchRequest | undefined>(undefined);
   private readonly finer = this.nightsApi.stretch(this.wanted);

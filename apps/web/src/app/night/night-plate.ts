@@ -1,19 +1,36 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import type { Site } from '@stillpier/contract';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  output,
+  resource,
+  signal,
+} from '@angular/core';
+import type { Setup, Site } from '@stillpier/contract';
 import type { RunStretch } from '../api/run-stretch';
-import { countedText, percentText, ratioText, secondsText } from '../figures/measure-text';
+import {
+  countedText,
+  NO_VALUE,
+  percentText,
+  ratioText,
+  secondsText,
+} from '../figures/measure-text';
 import { NightRibbon, type RibbonKey } from '../figures/night-ribbon/night-ribbon';
 import { endMs, type RibbonRun } from '../figures/night-ribbon/ribbon-night';
 import { nightSpells, ribbonSkies, skyText, sunDown } from './night-sky';
 import { keyedOn, type FindingNote } from './page-notes';
-import type { ShownRun } from './shown-run';
+import { runTitle, type ShownRun } from './shown-run';
+import { subChoices } from './sub-choices';
+import { forecastRuns, type Subs } from './sub-forecasts';
+import { SubLengthChoice, type SubLengthOption } from './sub-length-choice';
 
 const EDGE_MS = 20 * 60_000;
 
 /** The whole night on one time axis, with the subs that it would have given. */
 @Component({
   selector: 'app-night-plate',
-  imports: [NightRibbon],
+  imports: [NightRibbon, SubLengthChoice],
   templateUrl: './night-plate.html',
   styleUrl: './night-plate.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -27,12 +44,21 @@ export class NightPlate {
   /** null until it is known. */
   readonly site = input.required<Site | null>();
   readonly stretches = input.required<ReadonlyMap<string, RunStretch>>();
+  /** Every frame of the runs; empty until they are there. */
+  readonly frames = input.required<ReadonlyMap<string, RunStretch>>();
+  readonly setups = input.required<readonly Setup[]>();
   readonly notes = input.required<readonly FindingNote[]>();
   readonly choose = output<string>();
 
   protected readonly ribbonRuns = computed((): RibbonRun[] =>
-    this.runs().flatMap(({ id, name, startMs, of: { run } }) =>
-      startMs === null
+    this.runs().flatMap((each) => {
+      const {
+        id,
+        name,
+        startMs,
+        of: { run },
+      } = each;
+      return startMs === null
         ? []
         : [
             {
@@ -43,10 +69,10 @@ export class NightPlate {
               totalRmsArcsec: run.total?.rmsArcsec ?? null,
               stretch: this.stretches().get(id) ?? null,
               setAside: run.setAside,
-              subs: run.subs,
+              subs: this.subsOf(each),
             },
-          ],
-    ),
+          ];
+    }),
   );
   private readonly spells = computed(() => {
     const site = this.site();
@@ -64,14 +90,65 @@ export class NightPlate {
     };
   });
 
+  protected readonly wantedSeconds = signal<number | null>(null);
+  /** null: the runs differ, and each goes by its own setup. */
+  protected readonly lengthSeconds = computed(() => {
+    const own = new Set(this.runs().flatMap(({ of }) => of.run.subs?.lengthSeconds ?? []));
+    const [only] = own;
+    return this.wantedSeconds() ?? (own.size === 1 ? (only ?? null) : null);
+  });
+  private readonly choices = computed(() => subChoices(this.runs(), this.setups()));
+  private readonly worked = resource({
+    params: () => ({
+      runs: this.runs(),
+      frames: this.frames(),
+      lengths: this.choices().map(({ seconds }) => seconds),
+    }),
+    loader: ({ params, abortSignal }) =>
+      forecastRuns(params.runs, params.frames, params.lengths, abortSignal),
+  });
+  private readonly forecastsOf = computed(() =>
+    this.worked.hasValue() ? this.worked.value() : new Map<string, never>(),
+  );
+
+  /** Of the length that is chosen; the document's own until that is worked out. */
+  private subsOf({ id, of }: ShownRun): Subs | null {
+    const length = this.lengthSeconds();
+    if (length === null) return of.run.subs;
+    return this.forecastsOf().get(id)?.byLength.get(length) ?? of.run.subs;
+  }
+
+  protected readonly options = computed((): SubLengthOption[] => {
+    if (!this.runs().some(({ of }) => of.run.subs)) return [];
+    return this.choices().map(({ seconds, text }) => {
+      const subs = this.runs().flatMap(({ id, of }) => {
+        const own = of.run.subs?.lengthSeconds === seconds ? of.run.subs : undefined;
+        return own ?? this.forecastsOf().get(id)?.byLength.get(seconds) ?? [];
+      });
+      const count = subs.reduce((sum, each) => sum + each.count, 0);
+      const within = subs.reduce((sum, each) => sum + each.within, 0);
+      return { seconds, text, share: count === 0 ? NO_VALUE : percentText(within / count) };
+    });
+  });
+  protected readonly longest = computed(() =>
+    this.runs()
+      .flatMap((run) => {
+        const found = this.forecastsOf().get(run.id);
+        if (!found) return [];
+        const text = found.longestSeconds === null ? 'none' : secondsText(found.longestSeconds);
+        return [`${runTitle(run)} ${text}`];
+      })
+      .join('; '),
+  );
+
   /** Runs may differ in their setups, and so in the length of a sub. */
   protected readonly forecasts = computed(() => {
     const byLength = new Map<
       string,
       { length: string; limit: string; count: number; within: number }
     >();
-    for (const { of } of this.runs()) {
-      const { subs } = of.run;
+    for (const run of this.runs()) {
+      const subs = this.subsOf(run);
       if (!subs) continue;
       const length = secondsText(subs.lengthSeconds);
       const limit = ratioText(subs.keepAspect);

@@ -22,6 +22,7 @@ const TOP_PX = 28;
 const PX_PER_HOUR = 46;
 const LEAST_PX = 260;
 const ROW_PX = 3;
+const NAME_PX = 38;
 
 export function tallTimeScale(view: RibbonView): Scale {
   const hours = (view.toMs - view.fromMs) / 3_600_000;
@@ -57,6 +58,7 @@ export function tallRibbon(view: RibbonView): RibbonDrawing {
         ...runShapes(run, y, view),
         ...subShapes(run, y, top),
       ]),
+      ...runNames(view, y),
       ...limitShapes(view, top, endPx),
     ],
   };
@@ -119,11 +121,27 @@ function runShapes(run: RibbonRun, y: Scale, view: RibbonView): Shape[] {
     line(LEFT_PX, from, view.widthPx, from, 'ink'),
     line(LEFT_PX, to, SUBS_LEFT_PX + SUBS_PX, to, 'ink'),
     ...(selected ? [path(`M${LEFT_PX + 4} ${from}H${LEFT_PX}V${to}h4`, 'bracket')] : []),
-    text(view.widthPx, from + 17, run.name, selected ? 'name strong halo' : 'name halo', 'end'),
-    ...(run.totalRmsArcsec === null
-      ? []
-      : [text(view.widthPx, from + 34, arcsecText(run.totalRmsArcsec), 'axis halo', 'end')]),
   ];
+}
+
+/** Under the upper edge of a run; where runs are short a name may find no room, the selected one does. */
+function runNames(view: RibbonView, y: Scale): Shape[] {
+  const taken: number[] = [];
+  const bySelection = [...view.runs].sort(
+    (a, b) => Number(b.id === view.selectedId) - Number(a.id === view.selectedId),
+  );
+  return bySelection.flatMap((run) => {
+    const from = y(run.startMs);
+    if (taken.some((other) => Math.abs(other - from) < NAME_PX)) return [];
+    taken.push(from);
+    const look = run.id === view.selectedId ? 'name strong halo' : 'name halo';
+    return [
+      text(view.widthPx, from + 17, run.name, look, 'end'),
+      ...(run.totalRmsArcsec === null
+        ? []
+        : [text(view.widthPx, from + 34, arcsecText(run.totalRmsArcsec), 'axis halo', 'end')]),
+    ];
+  });
 }
 
 function subShapes(run: RibbonRun, y: Scale, top: number): Shape[] {
