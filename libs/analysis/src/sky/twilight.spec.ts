@@ -33,7 +33,9 @@ describe('the skies of a night', () => {
       .concat(['15:46:57', '16:19:36', '16:57:22', '17:35:36'])
       .map((time) => seconds(`2013-03-05T${time}Z`));
     // SunCalc takes one declination for the day: near the equinox that is worth a minute and a half at dawn and dusk
-    ends.forEach((end, i) => { expect(Math.abs(end - (told[i] ?? NaN))).toBeLessThan(100); });
+    ends.forEach((end, i) => {
+      expect(Math.abs(end - (told[i] ?? NaN))).toBeLessThan(100);
+    });
   });
 
   it('leave the sun at the altitude that ends them', () => {
@@ -42,7 +44,9 @@ describe('the skies of a night', () => {
       .slice(0, 4)
       .map(({ toEpochSeconds }) => sunAltitudeDegrees(toEpochSeconds, place));
     // by definition; half a second of time moves the sun by less than 0.0021°
-    [-50 / 60, -6, -12, -18].forEach((limit, i) => { expect(altitudes[i]).toBeCloseTo(limit, 2); });
+    [-50 / 60, -6, -12, -18].forEach((limit, i) => {
+      expect(altitudes[i]).toBeCloseTo(limit, 2);
+    });
   });
 
   it('follow each other without gap or overlap', () => {
