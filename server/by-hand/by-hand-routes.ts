@@ -1,7 +1,7 @@
 import { byHandPaths, byHandSchema, changeByHandSchema, importPaths } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import type { ByHandService } from './by-hand-service';
 
@@ -12,13 +12,13 @@ export function byHandRoutes(byHand: ByHandService): Router {
 
   router.get(byHandPaths.of(':rigId', ':runId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, runId } = readRequest(parametersSchema, req.params);
+    const { rigId, runId } = readParameters(parametersSchema, req.params);
     res.json(byHandSchema.parse(await byHand.of(account.id, rigId, runId)));
   });
 
   router.post(byHandPaths.of(':rigId', ':runId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, runId } = readRequest(parametersSchema, req.params);
+    const { rigId, runId } = readParameters(parametersSchema, req.params);
     const change = readRequest(changeByHandSchema, req.body);
     const after = await byHand.change(account.id, rigId, runId, change);
     res.status(202).location(importPaths.one(rigId, after.importId));

@@ -9,7 +9,7 @@ import {
 } from '@stillpier/contract';
 import { type Request, Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import type { ColumnMapService } from './column-map-service';
 
@@ -25,7 +25,7 @@ interface Parent {
   readonly schema: typeof ownColumnMapSchema | typeof savedColumnMapSchema;
 }
 
-const rigIdOf = (req: Request) => readRequest(rigParametersSchema, req.params).rigId;
+const rigIdOf = (req: Request) => readParameters(rigParametersSchema, req.params).rigId;
 const PARENTS: readonly Parent[] = [
   {
     paths: columnMapPathsOf(':rigId'),
@@ -71,13 +71,13 @@ function routesUnder({ paths, pathsFor, rigOf, schema }: Parent, maps: ColumnMap
 
   router.get(paths.one(':mapId'), async (req, res) => {
     const account = requireAccount(req);
-    const { mapId } = readRequest(mapParametersSchema, req.params);
+    const { mapId } = readParameters(mapParametersSchema, req.params);
     res.json(schema.parse(await maps.one(account.id, rigOf(req), mapId)));
   });
 
   router.get(paths.file(':mapId'), async (req, res) => {
     const account = requireAccount(req);
-    const { mapId } = readRequest(mapParametersSchema, req.params);
+    const { mapId } = readParameters(mapParametersSchema, req.params);
     const { name, map } = await maps.one(account.id, rigOf(req), mapId);
     res.attachment(`${name}.json`).type('json');
     res.send(`${JSON.stringify(columnMapSchema.parse(map), null, 2)}\n`);
@@ -85,7 +85,7 @@ function routesUnder({ paths, pathsFor, rigOf, schema }: Parent, maps: ColumnMap
 
   router.delete(paths.one(':mapId'), async (req, res) => {
     const account = requireAccount(req);
-    const { mapId } = readRequest(mapParametersSchema, req.params);
+    const { mapId } = readParameters(mapParametersSchema, req.params);
     await maps.remove(account.id, rigOf(req), mapId);
     res.status(204).end();
   });

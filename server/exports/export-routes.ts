@@ -3,7 +3,7 @@ import { pipeline } from 'node:stream/promises';
 import { exportPaths } from '@stillpier/contract';
 import { type Response, Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import type { Export, ExportService } from './export-service';
 
@@ -16,19 +16,19 @@ export function exportRoutes(exports: ExportService): Router {
 
   router.get(exportPaths.frames(':rigId', ':importId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, importId } = readRequest(importParametersSchema, req.params);
+    const { rigId, importId } = readParameters(importParametersSchema, req.params);
     await send(res, 'text/csv', await exports.frames(account.id, rigId, importId));
   });
 
   router.get(exportPaths.night(':rigId', ':date'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, date } = readRequest(nightParametersSchema, req.params);
+    const { rigId, date } = readParameters(nightParametersSchema, req.params);
     await send(res, 'application/zip', await exports.night(account.id, rigId, date));
   });
 
   router.get(exportPaths.rig(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(rigParametersSchema, req.params);
+    const { rigId } = readParameters(rigParametersSchema, req.params);
     await send(res, 'application/zip', await exports.rig(account.id, rigId));
   });
 

@@ -10,7 +10,7 @@ import {
 } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import type { NightService } from './night-service';
 import type { RigStateService } from './rig-state-service';
@@ -37,20 +37,20 @@ export function nightRoutes({ nights, rigStates, runSeries }: NightParts): Route
 
   router.get(nightPaths.all(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(rigParametersSchema, req.params);
+    const { rigId } = readParameters(rigParametersSchema, req.params);
     const query = readRequest(pageQuerySchema, req.query);
     res.json(nightPageSchema.parse(await nights.list(account.id, rigId, query)));
   });
 
   router.get(nightPaths.one(':rigId', ':date'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, date } = readRequest(nightParametersSchema, req.params);
+    const { rigId, date } = readParameters(nightParametersSchema, req.params);
     res.json(nightSchema.parse(await nights.one(account.id, rigId, date)));
   });
 
   router.get(nightPaths.series(':rigId', ':runId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, runId } = readRequest(runParametersSchema, req.params);
+    const { rigId, runId } = readParameters(runParametersSchema, req.params);
     const query = readRequest(seriesQuerySchema, req.query);
     const stretch = await runSeries.series(account.id, rigId, runId, query);
     res.type('application/octet-stream').send(stretch);
@@ -58,7 +58,7 @@ export function nightRoutes({ nights, rigStates, runSeries }: NightParts): Route
 
   router.get(nightPaths.spectrum(':rigId', ':runId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, runId } = readRequest(runParametersSchema, req.params);
+    const { rigId, runId } = readParameters(runParametersSchema, req.params);
     res.json(spectrumCurveSchema.parse(await runSeries.spectrum(account.id, rigId, runId)));
   });
 

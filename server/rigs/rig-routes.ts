@@ -1,7 +1,7 @@
 import { createRigSchema, rigPaths, rigSchema, updateRigSchema } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import { requireVersion, versionTag } from '../http/version-tag';
 import type { RigService } from './rig-service';
@@ -25,14 +25,14 @@ export function rigRoutes(rigs: RigService): Router {
 
   router.get(rigPaths.one(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(parametersSchema, req.params);
+    const { rigId } = readParameters(parametersSchema, req.params);
     const rig = await rigs.one(account.id, rigId);
     res.set('ETag', versionTag(rig.version)).json(rigSchema.parse(rig));
   });
 
   router.put(rigPaths.one(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(parametersSchema, req.params);
+    const { rigId } = readParameters(parametersSchema, req.params);
     const version = requireVersion(req);
     const body = readRequest(updateRigSchema, req.body);
     const rig = await rigs.update(account.id, rigId, version, body);
@@ -41,7 +41,7 @@ export function rigRoutes(rigs: RigService): Router {
 
   router.delete(rigPaths.one(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(parametersSchema, req.params);
+    const { rigId } = readParameters(parametersSchema, req.params);
     await rigs.remove(account.id, rigId);
     res.status(204).end();
   });

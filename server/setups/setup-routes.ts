@@ -1,7 +1,7 @@
 import { createSetupSchema, setupPaths, setupSchema, updateSetupSchema } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import { requireVersion, versionTag } from '../http/version-tag';
 import type { SetupService } from './setup-service';
@@ -14,13 +14,13 @@ export function setupRoutes(setups: SetupService): Router {
 
   router.get(setupPaths.all(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(rigParametersSchema, req.params);
+    const { rigId } = readParameters(rigParametersSchema, req.params);
     res.json(z.array(setupSchema).parse(await setups.list(account.id, rigId)));
   });
 
   router.post(setupPaths.all(':rigId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId } = readRequest(rigParametersSchema, req.params);
+    const { rigId } = readParameters(rigParametersSchema, req.params);
     const body = readRequest(createSetupSchema, req.body);
     const setup = await setups.create(account.id, rigId, body);
     res
@@ -32,14 +32,14 @@ export function setupRoutes(setups: SetupService): Router {
 
   router.get(setupPaths.one(':rigId', ':setupId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, setupId } = readRequest(parametersSchema, req.params);
+    const { rigId, setupId } = readParameters(parametersSchema, req.params);
     const setup = await setups.one(account.id, rigId, setupId);
     res.set('ETag', versionTag(setup.version)).json(setupSchema.parse(setup));
   });
 
   router.put(setupPaths.one(':rigId', ':setupId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, setupId } = readRequest(parametersSchema, req.params);
+    const { rigId, setupId } = readParameters(parametersSchema, req.params);
     const version = requireVersion(req);
     const body = readRequest(updateSetupSchema, req.body);
     const setup = await setups.update(account.id, rigId, setupId, version, body);
@@ -48,7 +48,7 @@ export function setupRoutes(setups: SetupService): Router {
 
   router.delete(setupPaths.one(':rigId', ':setupId'), async (req, res) => {
     const account = requireAccount(req);
-    const { rigId, setupId } = readRequest(parametersSchema, req.params);
+    const { rigId, setupId } = readParameters(parametersSchema, req.params);
     await setups.remove(account.id, rigId, setupId);
     res.status(204).end();
   });

@@ -7,7 +7,7 @@ import {
 } from '@stillpier/contract';
 import { Router } from 'express';
 import * as z from 'zod';
-import { readRequest } from '../http/read-request';
+import { readParameters, readRequest } from '../http/read-request';
 import { requireAccount } from '../http/signed-in';
 import type { AccessTokenService } from './access-token-service';
 
@@ -30,14 +30,14 @@ export function accessTokenRoutes(tokens: AccessTokenService): Router {
 
   router.patch(accessTokenPaths.one(':tokenId'), async (req, res) => {
     const account = requireAccount(req);
-    const { tokenId } = readRequest(parametersSchema, req.params);
+    const { tokenId } = readParameters(parametersSchema, req.params);
     const changes = readRequest(updateAccessTokenSchema, req.body);
     res.json(accessTokenSchema.parse(await tokens.update(account.id, tokenId, changes)));
   });
 
   router.delete(accessTokenPaths.one(':tokenId'), async (req, res) => {
     const account = requireAccount(req);
-    const { tokenId } = readRequest(parametersSchema, req.params);
+    const { tokenId } = readParameters(parametersSchema, req.params);
     await tokens.revoke(account.id, tokenId);
     res.status(204).end();
   });

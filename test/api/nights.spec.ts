@@ -95,7 +95,7 @@ describe('a night', () => {
 
   it('that the rig does not have is not found', async () => {
     expect((await cast.owner.get(nightPaths.one(cast.rigId, '2020-01-01'))).status).toBe(404);
-    expect((await cast.owner.get(nightPaths.one(cast.rigId, 'today'))).status).toBe(400);
+    expect((await cast.owner.get(nightPaths.one(cast.rigId, 'today'))).status).toBe(404);
   });
 
   it('is another one when the site turns out to lie in another time zone', async () => {

@@ -90,6 +90,11 @@ describe('a rig', () => {
     expect(problemSchema.parse(refused.body).errors?.map((error) => error.path)).toEqual([path]);
   });
 
+  it('is not found at an address that no rig can have', async () => {
+    expect((await cast.owner.get(rigPaths.one('nonsense'))).status).toBe(404);
+    expect((await cast.owner.get(setupPaths.all('nonsense'))).status).toBe(404);
+  });
+
   it('goes with all that hangs on it', async () => {
     const { rig } = await newRig();
     await cast.owner.post(setupPaths.all(rig.id)).send(EXAMPLE_SETUP).expect(201);
