@@ -93,12 +93,10 @@ function stateBeforeSending({ intake, ready }: DeskFile): FileState {
     const with_ = intake.savedMap ? `With the map ${intake.savedMap.name}.` : null;
     return { ...NOTHING, level: 'fine', words: 'Ready', sentence: with_ };
   }
-  if (intake.missing !== null) {
-    return { ...NOTHING, level: 'watch', words: 'Columns to name', sentence: intake.missing };
-  }
-  return intake.choices.some(lacksUnit)
-    ? { ...NOTHING, level: 'watch', words: 'Units to name' }
-    : { ...NOTHING, level: 'watch', words: 'Start time to give' };
+  const open = intake.choices.some(lacksUnit) ? 'Units to name' : 'Columns to name';
+  return intake.missing === null
+    ? { ...NOTHING, level: 'watch', words: 'Start time to give' }
+    : { ...NOTHING, level: 'watch', words: open, sentence: intake.missing };
 }
 
 function duplicateOf(of: LogImport): FileState {

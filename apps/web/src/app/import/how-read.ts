@@ -25,6 +25,8 @@ import type { Intake } from './intake';
 })
 export class HowRead {
   readonly intake = input.required<Intake>();
+  /** Of the rig's site. */
+  readonly timeZone = input.required<string>();
 
   protected readonly facts = computed(() => {
     const { preview, choices, needsStart } = this.intake();
@@ -34,6 +36,9 @@ export class HowRead {
     return [
       ...(time
         ? [{ name: 'Time', value: UNIT_WORDS[time] + (needsStart ? ', no date' : '') }]
+        : []),
+      ...(time === 'iso' || time === 'clock'
+        ? [{ name: 'Zone, if none is told', value: this.timeZone() }]
         : []),
       ...(cadence === null ? [] : [{ name: 'Cadence', value: secondsText(cadence) }]),
       { name: 'Encoding', value: preview.encoding },

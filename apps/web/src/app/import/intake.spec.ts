@@ -94,6 +94,13 @@ describe('intakeOf', () => {
     expect(intake.map?.columns?.['dRA']?.sentinels).toEqual(['-1']);
   });
 
+  it('names the columns whose unit is open, in the order of the file', () => {
+    const open = CHOICES.map((choice) => ({ ...choice, unit: null }));
+    const intake = intakeOf(OTHER, [], byHand({ columns: open }));
+    expect(intake.missing).toBe('Pick a unit: clock, dRA, dDec.');
+    expect(intake.choices).toEqual(open);
+  });
+
   it('says when two columns have one role', () => {
     const twice = [...CHOICES.slice(0, 2), { role: 'raError', unit: 'arcsec' } as const];
     expect(intakeOf(OTHER, [], byHand({ columns: twice })).missing).toContain(

@@ -78,10 +78,18 @@ export function intakeOf(
     headerCells: headerCellsOf(preview),
     choices,
     savedMap: isAsFound ? (found ?? null) : null,
-    missing: typeof mapped === 'string' ? mapped : mapped.missing,
+    missing: openUnits(preview, choices) ?? (typeof mapped === 'string' ? mapped : mapped.missing),
     needsStart: map.startTime === undefined && tellsNoDate(preview, choices),
     map: isAsFound && !found ? null : map,
   };
+}
+
+/** The columns whose unit must still be picked, as a sentence. */
+function openUnits({ columns }: GuideLogPreview, choices: readonly ColumnChoice[]): string | null {
+  const names = columns
+    .filter((_, i) => choices[i] && lacksUnit(choices[i]))
+    .map(({ header, number }) => (header?.trim() ? header.trim() : `column ${number}`));
+  return names.length === 0 ? null : `Pick a unit: ${names.join(', ')}.`;
 }
 
 function orBare(preview: GuideLogPreview | string, bare: GuideLogPreview): GuideLogPreview {

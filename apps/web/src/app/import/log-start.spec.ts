@@ -24,6 +24,16 @@ describe('guessStart', () => {
     expect(guess.local).toBe('2026-11-28T18:42:15');
   });
 
+  it.each([
+    ['18:42:15', '2026-01-20T18:42:15'],
+    ['02:10:00', '2026-01-21T02:10:00'], // a night lasts from noon to noon
+  ])('puts a log that was read before into its night again: %s', (clock, local) => {
+    const log = new TextEncoder().encode(`clock,dRA,dDec\n${clock},0.45,-0.67\n`);
+    const file = { name: 'guide_2026-11-28.csv', lastModified: MORNING, night: '2026-01-20' };
+    const guess = guessStart(file, previewGuideLog(log), CLOCK, 'Europe/Berlin');
+    expect(guess.local).toBe(local);
+  });
+
   it('guesses no time of day, but says when the file was written', () => {
     const file = { name: 'guide.csv', lastModified: MORNING };
     const guess = guessStart(file, preview, [], 'Europe/Berlin');

@@ -12,9 +12,21 @@ export interface StartGuess {
   readonly hint: string;
 }
 
-/** The time of day from a clock column, on the date in the file's name, else on the evening before it was written. */
+/** What may tell the date of a log. */
+export interface LogOrigin {
+  readonly name: string;
+  /** When it was written, or came. */
+  readonly lastModified: number;
+  /** The evening that it was read to before. */
+  readonly night?: string | undefined;
+}
+
+/**
+ * The time of day from a clock column, in the night that it was read to before, on the date in the file's name, else on the
+ * evening before it was written.
+ */
 export function guessStart(
-  file: Pick<File, 'name' | 'lastModified'>,
+  file: LogOrigin,
   preview: GuideLogPreview,
   choices: readonly ColumnChoice[],
   timeZone: string,
@@ -27,6 +39,10 @@ export function guessStart(
       hint: `The file was last written on ${dayText(written.slice(0, 10))} at ${written.slice(11, 16)}.`,
     };
   }
+  if (file.night !== undefined) {
+    const day = clock < '12' ? dayAfter(file.night) : file.night; // a night lasts from noon to noon
+    return { local: `${day}T${clock}`, hint: 'The date is that of the night it was read to.' };
+  }
   const named = /(20\d\d)[-_.]?(0[1-9]|1[0-2])[-_.]?(0[1-9]|[12]\d|3[01])/.exec(file.name);
   const evening = localDateTimeText(file.lastModified - HALF_DAY_MS, timeZone).slice(0, 10);
   return {
@@ -35,6 +51,10 @@ export function guessStart(
       ? 'The date is taken from the name of the file: check it.'
       : 'The date is taken from when the file was last written: check it.',
   };
+}
+
+function dayAfter(date: string): string {
+  return new Date(Date.parse(`${date}T00:00:00Z`) + 2 * HALF_DAY_MS).toISOString().slice(0, 10);
 }
 
 function clockOfFirstFrame(

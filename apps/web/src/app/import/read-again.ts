@@ -64,9 +64,9 @@ export class ReadAgain {
     this.head.hasValue() ? intakeOf(this.head.value(), this.maps.maps(), this.hand()) : null,
   );
   private readonly guess = computed(() => {
-    const { fileName, createdAt } = this.log();
+    const { fileName, createdAt, nights } = this.log();
     const intake = this.intake();
-    const file = { name: fileName, lastModified: Date.parse(createdAt) };
+    const file = { name: fileName, lastModified: Date.parse(createdAt), night: nights[0] };
     return intake?.preview && intake.needsStart
       ? guessStart(file, intake.preview, intake.choices, this.timeZone())
       : null;

@@ -38,6 +38,9 @@ const MOST_SHOWN = 6;
     :host {
       display: block;
     }
+    dl + p {
+      margin-top: 8px;
+    }
     dd {
       overflow-wrap: anywhere;
     }

@@ -17,8 +17,8 @@ import { sentenceOf } from '../api/problem-error';
           (change)="take($event)"
         />
       </label>
-      <span class="q">MAP.json, as it is saved here or used by the command line.</span>
     </p>
+    <p class="small q">MAP.json, as it is saved here or used by the command line.</p>
     <div role="alert">
       @if (fault(); as text) {
         <p class="refusal">{{ text }}</p>
@@ -32,7 +32,6 @@ import { sentenceOf } from '../api/problem-error';
     }
     .choose {
       display: inline-block;
-      margin-right: 14px;
       padding-block: 10px;
       text-decoration: underline;
       text-decoration-color: var(--mark);
