@@ -32,6 +32,7 @@ import {
 } from './trace-options';
 import { traceTicks } from './trace-ticks';
 import {
+  covers,
   firstAtOrAfter,
   nearestIndex,
   type SecondsRange,
@@ -43,6 +44,7 @@ const ASK_AFTER_MS = 200;
 /** A thinned stretch this many times as long as what is in sight is too coarse for it. */
 const COARSE_FROM = 2.5;
 const MOST_TABLE_ROWS = 300;
+const MOMENT_SECONDS = 180;
 
 /** A key at a time of the run, on the strip of one axis. */
 export interface TraceKey extends KeyOfNote {
@@ -236,6 +238,12 @@ export class TraceChart {
     this.show(0, this.durationSeconds());
   }
 
+  /** The frames around a moment, with the reading line on it. */
+  showMoment(seconds: number): void {
+    this.show(seconds - MOMENT_SECONDS / 2, Math.min(MOMENT_SECONDS, this.durationSeconds()));
+    this.readingSeconds.set(seconds);
+  }
+
   private show(fromSeconds: number, length: number): void {
     const from = Math.min(Math.max(0, fromSeconds), this.durationSeconds() - length);
     this.sight.set({ fromSeconds: from, toSeconds: from + length });
@@ -286,8 +294,4 @@ export class TraceChart {
     const share = (reading.seconds - fromSeconds) / (toSeconds - fromSeconds);
     return { ...reading, leftPx: LEFT_PX + share * this.plotPx() };
   }
-}
-
-function covers(stretch: SecondsRange, sight: SecondsRange): boolean {
-  return stretch.fromSeconds <= sight.fromSeconds + 1 && stretch.toSeconds >= sight.toSeconds - 1;
 }

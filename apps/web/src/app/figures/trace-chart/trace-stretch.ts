@@ -41,3 +41,8 @@ export function nearestIndex(timeSeconds: Float64Array, seconds: number): number
   const distance = (index: number): number => Math.abs((timeSeconds[index] ?? Infinity) - seconds);
   return distance(after) < distance(before) ? after : before;
 }
+
+/** Whether a stretch holds what is in sight, to a second. */
+export function covers(stretch: SecondsRange, sight: SecondsRange): boolean {
+  return stretch.fromSeconds <= sight.fromSeconds + 1 && stretch.toSeconds >= sight.toSeconds - 1;
+}
