@@ -137,10 +137,10 @@ function withMotion(
     smooth: model.smooth,
     setAside: run.setAside,
     driftPerSecond: model.driftPerSecond,
-    driftStandardError:
-      known.responseUsed?.from === 'log'
-        ? driftError(model.driftStandardError, displacement, run.timeSeconds, estimated)
-        : model.driftStandardError,
+    driftStandardError: driftError(model.driftStandardError, displacement, run.timeSeconds, {
+      used: known.responseUsed,
+      estimated,
+    }),
     floorArcsec,
   });
   const loop = axisLoop(input, known, model, floorArcsec, stepArcsec);

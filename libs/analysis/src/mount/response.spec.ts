@@ -50,8 +50,11 @@ describe('the response that is used', () => {
   });
 
   it("stays the rig's where correlated seeing would make the log read so low", () => {
-    // 0.1 of gain at 100 ms per arcsec is 0.001 ″/ms.
-    expect(chooseResponse(RIG, estimate(0.0062, 0.0002), ANSWER)?.from).toBe('rig');
+    // Guiders that answer 1 ″ with 100 ms have a gain of 0.75 here: a quarter below 0.0075 is 0.0057.
+    expect(chooseResponse(RIG, estimate(0.0058, 0.0002), ANSWER)?.from).toBe('rig');
+    expect(chooseResponse(RIG, estimate(0.0052, 0.0002), ANSWER)?.from).toBe('log');
+    // At a gain of 1.5 the same seeing takes 0.18/1.5 of it.
+    expect(chooseResponse(RIG, estimate(0.0062, 0.0002), 2 * ANSWER)?.from).toBe('log');
   });
 
   it("is the log's where it reads below an upper limit, since the declination explains it", () => {

@@ -28,8 +28,11 @@ export interface RigResponse {
 /** A relative standard error beyond this tells nothing. */
 const LARGEST_RELATIVE_ERROR = 0.2;
 const CONTRADICTION = 3;
-/** Of neighbouring frames' seeing: what a log may hold without showing it. */
-const SEEING_CORRELATION = 0.1;
+/**
+ * Seeing whose neighbouring frames correlate by 0.2 makes a response read low by a quarter at gains up to 0.7 and by 0.18
+ * over the gain beyond (simulated nights of one and two hours), and leaves no trace that tells it from a weaker response.
+ */
+const LOW_BY_SEEING = { most: 0.24, timesGain: 0.18 };
 const FEWEST_A_DIRECTION = 20;
 
 /**
@@ -124,9 +127,8 @@ export function rigResponse(
 /**
  * The response that the uncorrected motion rests on: the rig's, unless the log contradicts it by more than three
  * standard errors; else the log's; else null. Seeing that is correlated from frame to frame, and gusts, make the log's
- * response read low: in the loop's own terms a correlation ρ passes for a gain lower by ρ. A reading below the rig's
- * contradicts it only by what ρ = 0.1 cannot explain; one below an upper limit contradicts it as it stands, since the
- * declination explains it as well. A difference between the directions that the log shows beyond three standard errors is
+ * response read low. A reading below the rig's contradicts it only beyond `LOW_BY_SEEING` and one standard error; one
+ * below an upper limit contradicts it as it stands, since the declination explains it as well. A difference between the directions that the log shows beyond three standard errors is
  * kept either way: it would add up to a drift.
  *
  * @param gainPerUnit Part of an error that a guider answers, in units of correction per arcsec; null where not known.
@@ -160,10 +162,11 @@ function contradicts(
 ): boolean {
   if (estimated === null) return false;
   const allowed = CONTRADICTION * estimated.standardError;
-  const correlated =
-    gainPerUnit === null || rig.isUpperLimit ? 0 : SEEING_CORRELATION / gainPerUnit;
   const excess = estimated.perUnit - rig.perUnit;
-  return excess > allowed || excess < -allowed - correlated;
+  if (rig.isUpperLimit || gainPerUnit === null) return Math.abs(excess) > allowed;
+  const { most, timesGain } = LOW_BY_SEEING;
+  const lowBySeeing = Math.min(most * rig.perUnit, timesGain / gainPerUnit);
+  return excess > allowed || excess < -Math.max(allowed, lowBySeeing + estimated.standardError);
 }
 
 /** REPORT's Response: what the log tells, in arcsec per second of correction; corrections in arcsec have no seconds. */

@@ -71,24 +71,27 @@ function rangeOf(values: Float64Array): number {
 }
 
 /**
- * Standard error of a drift whose response comes from the log: the response's own error moves it with all that was
- * corrected, that of the difference between the directions with the sum of all sizes.
+ * Standard error of a drift with that of the response in it: what of the response comes from the log moves the drift, its
+ * mean with all that was corrected, a difference between the directions with the sum of all sizes.
  */
 export function driftError(
   fitted: number,
   displacementArcsec: Float64Array,
   timeSeconds: Float64Array,
-  estimated: EstimatedResponse | null,
+  response: {
+    readonly used: UsedResponse | null;
+    readonly estimated: EstimatedResponse | null;
+  },
 ): number {
-  if (estimated === null) return fitted;
+  const { used, estimated } = response;
+  if (used === null || estimated === null) return fitted;
   const span = (timeSeconds.at(-1) ?? 0) - (timeSeconds[0] ?? 0);
-  const [net, all] = displacementArcsec.reduce<[number, number]>(
-    ([sum, size], move) => [sum + move, size + Math.abs(move)],
-    [0, 0],
-  );
-  return Math.hypot(
-    fitted,
-    (net / span) * (estimated.standardError / estimated.perUnit),
-    (all / span) * (estimated.halfDifferenceError / estimated.perUnit),
-  );
+  let [net, all] = [0, 0];
+  for (const move of displacementArcsec) {
+    net += move;
+    all += Math.abs(move);
+  }
+  const isDifferenceOfLog = used.from === 'log' || used.positivePerUnit !== used.negativePerUnit;
+  const ofDifference = isDifferenceOfLog ? estimated.halfDifferenceError / estimated.perUnit : 0;
+  return Math.hypot(fitted, (net / span) * used.relativeStandardError, (all / span) * ofDifference);
 }
