@@ -72,6 +72,12 @@ it('the main limit is the worst finding; of two as bad that of the longer run', 
   expect(summariseNight([RUN]).mainLimitCode).toBeNull();
 });
 
+it('the sky is the main limit when the mount has nothing to be done about', () => {
+  const worm = { code: 'periodic-error', severity: 'fine' } as const;
+  const sky = { code: 'seeing-limited', severity: 'fine' } as const;
+  expect(summariseNight([later({ findings: [worm, sky] })]).mainLimitCode).toBe('seeing-limited');
+});
+
 it('runs that are too short to measure leave the measures open', () => {
   const bare = later({ raRmsArcsec: null, aspect: null, positionAngleDegrees: null });
   expect(summariseNight([bare])).toMatchObject({ raRmsArcsec: null, aspect: null });

@@ -71,9 +71,16 @@ export function summariseNight(runs: readonly MeasuredRun[]): NightMeasures {
 /** The worst finding of the night; of two as bad, that of the run with more frames. */
 function mainLimit(runs: readonly MeasuredRun[]): MeasuredRun['findings'][number] | null {
   const byFrames = [...runs].sort((a, b) => b.used - a.used);
-  const first = byFrames.flatMap(({ findings }) => findings.slice(0, 1));
+  const first = byFrames.flatMap((run) => limitOf(run) ?? []);
   first.sort((a, b) => SEVERITIES.indexOf(b.severity) - SEVERITIES.indexOf(a.severity));
   return first[0] ?? null;
+}
+
+/** Findings stand in the order of their gain; where none asks for anything, the sky is what limited. */
+function limitOf({ findings }: MeasuredRun): MeasuredRun['findings'][number] | undefined {
+  const [first] = findings;
+  if (first?.severity !== 'fine') return first;
+  return findings.find(({ code }) => code === 'seeing-limited') ?? first;
 }
 
 function endMs({ startsAt, durationSeconds }: MeasuredRun): number {
