@@ -30,10 +30,11 @@ describe('the page that confirms an address', () => {
     expect(shown.page.querySelector('[role=alert] a')?.textContent).toContain('get a new one');
   });
 
-  it('says when the link is cut short', async () => {
-    for (const address of ['/confirm', '/confirm#token=cut-short']) {
+  it.each(['/confirm', '/confirm#token=cut-short'])(
+    'says when the link is cut short, as in %s',
+    async (address) => {
       const shown = await open(address);
       expect(shown.page.textContent).toContain('This link is not whole');
-    }
-  });
+    },
+  );
 });
