@@ -1,12 +1,14 @@
 import {
   ARCSEC_PER_RADIAN,
   dawesArcsec,
+  describeOptics,
   namedPeriods,
   plateScaleArcsecPerPx,
   rayleighArcsec,
   scaleRatio,
   SIDEREAL_DAY_SECONDS,
   SIDEREAL_RATE_ARCSEC_PER_SECOND,
+  STAR_RATE_ARCSEC_PER_SECOND,
   wormPeriodSeconds,
 } from '@stillpier/analysis';
 import { describe, expect, it } from 'vitest';
@@ -58,6 +60,19 @@ describe('plate scale', () => {
   });
 });
 
+describe('sampling', () => {
+  it('a star of two pixels is sampled by the largest pixel that will do (1.5c)', () => {
+    const { inputs, expected } = check('1.5c') as Entry<{ fwhm_arcsec: number }, number>;
+    const pixelUm = 3.76;
+    const focalLengthMm = (pixelUm * ARCSEC_PER_RADIAN) / 1000 / expected;
+    const optics = describeOptics({
+      imaging: { focalLengthMm, pixelUm },
+      seeingFwhmArcsec: inputs.fwhm_arcsec,
+    });
+    expect(optics.seeingSamplingPx).toBeCloseTo(2, 9);
+  });
+});
+
 describe('resolution', () => {
   it("Dawes' limit is 116 over the aperture (2.1)", () => {
     const entry = check('2.1') as Entry<{ D_mm: number }, number>;
@@ -69,6 +84,11 @@ describe('resolution', () => {
     agrees(rayleighArcsec(entry.inputs.D_mm, entry.inputs.lambda_nm), entry);
   });
 
+  it('the first dark ring lies at 1.21967 λ/D (2.2a)', () => {
+    // One nanometre over an aperture of so many millimetres is one arcsecond.
+    agrees(rayleighArcsec(1e-6 * ARCSEC_PER_RADIAN, 1), check('2.2a') as Entry<unknown, number>);
+  });
+
   it('138 over the aperture is Rayleigh at 548.5 nm (2.4)', () => {
     const { expected } = check('2.4') as Entry<unknown, number>;
     // The wavelength is given to 1e-6 of itself.
@@ -77,6 +97,11 @@ describe('resolution', () => {
 });
 
 describe('sidereal rate and worm period', () => {
+  it('a star of fixed place goes round in a stellar day (3.2, 3.3, 3.4b)', () => {
+    agrees(1296000 / STAR_RATE_ARCSEC_PER_SECOND, check('3.2') as Entry<unknown, number>);
+    agrees(STAR_RATE_ARCSEC_PER_SECOND / ARCSEC_PER_RADIAN, check('3.3') as Entry<unknown, number>);
+  });
+
   it('the sidereal day and the rate agree (3.1, 3.4a)', () => {
     agrees(SIDEREAL_DAY_SECONDS, check('3.1') as Entry<unknown, number>);
     agrees(SIDEREAL_RATE_ARCSEC_PER_SECOND, check('3.4a') as Entry<unknown, number>);

@@ -19,6 +19,7 @@ describe('time', () => {
   });
 
   it.each([
+    ['10.1a', '1957-10-04T19:26:24Z'],
     ['10.1b', '1987-04-10T00:00:00Z'],
     ['10.1c', '2000-01-01T12:00:00Z'],
   ])('the Julian day of %s is that of the calendar', (id, instant) => {
@@ -59,6 +60,22 @@ describe('place in the sky', () => {
       entry.expected.h_deg,
       entry,
     );
+  });
+
+  it('the same altitude by another theory of sidereal time (10.3b)', () => {
+    const { inputs } = check('10.3a') as Entry<
+      { dec_deg: number; lat_deg: number; lon_east_deg: number; jd: number; ra_h: number },
+      unknown
+    >;
+    const { expected, title } = check('10.3b') as Entry<unknown, { h_deg: number }>;
+    const hourAngle = hourAngleHours(
+      greenwichSiderealHours(inputs.jd),
+      inputs.lon_east_deg,
+      inputs.ra_h,
+    );
+    const altitude = altitudeDegrees(inputs.lat_deg, inputs.dec_deg, hourAngle);
+    // Mean for apparent sidereal time: the nutation of that day moves the altitude by 0.0007°.
+    expect(Math.abs(altitude - expected.h_deg), title).toBeLessThan(0.001);
   });
 
   it('the parallactic angle west of the meridian (10.4)', () => {
