@@ -42,7 +42,9 @@ test('a newcomer signs up, describes a rig, drops logs and reads what the mount 
   });
   const faults: string[] = [];
   page.on('console', (message) => {
-    if (message.type() === 'error') faults.push(message.text());
+    // The frame of a mail lets no script run: the test's own recorder tries, the product does not.
+    const isMailFrame = message.text().includes('about:srcdoc');
+    if (message.type() === 'error' && !isMailFrame) faults.push(message.text());
   });
 
   await signUpAndIn(page, newcomer('Ilse Varga'));
