@@ -10,7 +10,7 @@ const UNITLESS = new Set(
   (
     'status limit points version attempt progress lines line frames used count within turns order index headerLine ' +
     'refusedCount runCount nightCount keptShare reversals binning wormTeeth scaleRatio focalLengthRatio ' +
-    'aspect aspects aspectIfCured keepAspect eccentricity correlation lag1 share phase falseAlarmProbability ' +
+    'aspect aspects aspectIfCured subsKeptIfCured keepAspect eccentricity correlation lag1 share phase falseAlarmProbability ' +
     'gain bestGain noiseGain gainStandardError asymmetry'
   ).split(' '),
 );

@@ -255,6 +255,11 @@ export interface Finding {
   sentence: string;
   evidence: string[];
   nextStep: string;
-  gain: { rmsIfCuredArcsec: number | null; aspectIfCured: number | null } | null;
+  gain: {
+    rmsIfCuredArcsec: number | null;
+    aspectIfCured: number | null;
+    /** How many of the run's subs would be within the aspect that the owner keeps; as many as `subs.count` at most. */
+    subsKeptIfCured: number | null;
+  } | null;
   caution: string | null;
 }

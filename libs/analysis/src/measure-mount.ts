@@ -12,6 +12,7 @@ import { smallResponse } from './mount/small-response';
 import { describeOptics } from './optics/describe-optics';
 import { type RigDescription } from './rig-description';
 import { type RunSeries } from './series/run-series';
+import { subForecast } from './stars/sub-forecast';
 
 /** A run that is analysed: its frames, and what the document says of it so far. */
 export interface AnalysedRun {
@@ -61,6 +62,7 @@ export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription):
         dec: axes.dec && gainCurve(axes.dec, series),
       },
       usualPeriodicErrorArcsec: null,
+      subsKept: subsKept(run, series, rig),
       smallResponse: smallResponse(series, motion),
     };
     const measures = {
@@ -90,6 +92,23 @@ export function measureMount(runs: readonly AnalysedRun[], rig: RigDescription):
       uncorrectedDecArcsec: motion.dec.uncorrectedArcsec,
     };
   });
+}
+
+/** Subs within the owner's aspect, with the errors of the run made larger or smaller. */
+function subsKept(
+  { subs }: GuidedRun,
+  series: RunSeries,
+  { seeingFwhmArcsec }: RigDescription,
+): FindingContext['subsKept'] {
+  if (subs === null || seeingFwhmArcsec === undefined) return null;
+  return (raFactor, decFactor) => {
+    const changed = {
+      ...series,
+      raErrorArcsec: series.raErrorArcsec.map((error) => raFactor * error),
+      decErrorArcsec: series.decErrorArcsec.map((error) => decFactor * error),
+    };
+    return subForecast(changed, subs.lengthSeconds, seeingFwhmArcsec, subs.keepAspect).within;
+  };
 }
 
 /** The document's part of the Dec gap. */

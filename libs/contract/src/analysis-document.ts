@@ -173,7 +173,12 @@ export const findingSchema = z.strictObject({
   evidence: z.array(z.string()),
   nextStep: z.string(),
   gain: z
-    .strictObject({ rmsIfCuredArcsec: nullableNumber, aspectIfCured: nullableNumber })
+    .strictObject({
+      rmsIfCuredArcsec: nullableNumber,
+      aspectIfCured: nullableNumber,
+      // Documents of analysis version 1 do not tell it.
+      subsKeptIfCured: nullableNumber.default(null),
+    })
     .nullable(),
   caution: z.string().nullable(),
 });

@@ -104,8 +104,8 @@ describe('findings on simulated nights', () => {
     expect(found('gusts', 'gusts')!.caution).toContain('mains');
   });
 
-  it('says what a cure would gain: RMS and star', () => {
-    const { total, budget } = documentOf('strong worm').runs[0]!;
+  it('says what a cure would gain: RMS, star and subs', () => {
+    const { total, budget, subs } = documentOf('strong worm').runs[0]!;
     const part = budget!.ra.find((each) => each.part === 'periodic error')!;
     const { gain } = found('strong worm', 'periodic-error')!;
     expect(gain!.rmsIfCuredArcsec).toBeLessThan(total!.rmsArcsec);
@@ -115,6 +115,18 @@ describe('findings on simulated nights', () => {
       2,
     );
     expect(gain!.aspectIfCured).toBeLessThan(documentOf('strong worm').runs[0]!.footprint!.aspect);
+    expect(gain!.subsKeptIfCured).toBeGreaterThanOrEqual(subs!.within);
+    expect(gain!.subsKeptIfCured).toBeLessThanOrEqual(subs!.count);
+  });
+
+  it('knows the worm by the spectrum where the rig tells none', () => {
+    const rig = { ...WHOLE_RIG, mount: { guideRateSidereal: 0.5 } };
+    const { findings, periodicError } = diagnosed(nights['strong worm']!, 1, rig).runs[0]!;
+    expect(periodicError!.periodFrom).toBe('spectrum');
+    const codes = findings.map(({ code }) => code);
+    expect(codes).not.toContain('unnamed-line');
+    const [first = ''] = findings.find(({ code }) => code === 'periodic-error')!.evidence;
+    expect(first).toMatch(/^Period from the spectrum .* [1-9]\d* % of the RA error/);
   });
 });
 
@@ -124,6 +136,7 @@ describe('what the rig and the earlier nights add', () => {
     rig: WHOLE_RIG,
     optics: documentOf('strong worm').optics,
     gainCurves: { ra: null, dec: null },
+    subsKept: null,
     usualPeriodicErrorArcsec: null,
     smallResponse: null,
   };

@@ -1,4 +1,5 @@
 import {
+  type Axis,
   type BudgetPart,
   type Finding,
   type Optics,
@@ -20,6 +21,8 @@ export interface FindingContext {
   readonly gainCurves: { readonly ra: GainCurve | null; readonly dec: GainCurve | null };
   /** Peak to peak that is usual on this rig; null where no earlier nights are known. */
   readonly usualPeriodicErrorArcsec: number | null;
+  /** How many subs would be kept with the errors of each axis so many times as large; null where the seeing is not known. */
+  readonly subsKept: ((raFactor: number, decFactor: number) => number) | null;
   /** Dec response to small corrections over that to large ones, with its standard error; null where it cannot be told. */
   readonly smallResponse: { readonly ratio: number; readonly standardError: number } | null;
 }
@@ -81,10 +84,13 @@ export function partSeverity(part: Part, context: FindingContext): Severity {
   );
 }
 
-/** What a smaller variance in one or both axes would make of RMS and star, in arcsec² taken off. */
+/**
+ * What a smaller variance in one or both axes would make of RMS, star and subs, in arcsec² taken off. The errors of every
+ * sub are taken to shrink as those of the run do.
+ */
 export function gainIfCured(
   run: MeasuredRun,
-  { rig }: FindingContext,
+  { rig, subsKept }: FindingContext,
   off: { readonly ra?: number; readonly dec?: number },
 ): Finding['gain'] {
   if (run.ra === null || run.dec === null) return null;
@@ -98,5 +104,10 @@ export function gainIfCured(
     rmsIfCuredArcsec: Math.sqrt(east + north),
     aspectIfCured:
       seeing === undefined ? null : starFootprint({ east, north, cross }, seeing).aspect,
+    subsKeptIfCured: subsKept?.(factor(east, run.ra), factor(north, run.dec)) ?? null,
   };
+}
+
+function factor(variance: number, { rmsArcsec }: Axis): number {
+  return rmsArcsec === 0 ? 1 : Math.sqrt(variance) / rmsArcsec;
 }

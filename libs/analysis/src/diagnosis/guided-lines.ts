@@ -1,9 +1,17 @@
 import { type Part, type Peak } from '../analysis-document';
+import { labelPeriod, namedPeriods } from '../spectrum/label-period';
 import { type AxisName, type MeasuredRun, partOf } from './finding-context';
 
-/** Whether a line of the guided error is the worm's own or one of its harmonics. */
-export function isWorms({ label }: Peak): boolean {
-  return label?.startsWith('worm') ?? false;
+/**
+ * Whether a line of the guided error is the worm's own or one of its harmonics: by its name, or by the period that the
+ * spectrum offers where the rig tells no worm.
+ */
+export function isWorms({ label, periodSeconds }: Peak, run: MeasuredRun): boolean {
+  if (label !== null) return label.startsWith('worm');
+  const { periodicError, durationSeconds } = run;
+  if (periodicError?.periodFrom !== 'spectrum') return false;
+  const worm = namedPeriods({ mount: { wormPeriodSeconds: periodicError.periodSeconds } });
+  return labelPeriod(periodSeconds, 1 / durationSeconds, worm) !== null;
 }
 
 /** The strongest line that is not the worm's, and how the budget's 'periodic error' divides between worm and others. */
@@ -25,7 +33,7 @@ export function guidedLines(run: MeasuredRun, axis: AxisName): GuidedLines | nul
   const peaks = run.spectrum?.[axis].peaks ?? [];
   const power = (lines: readonly Peak[]) =>
     lines.reduce((sum, { amplitudeArcsec }) => sum + amplitudeArcsec ** 2, 0);
-  const others = peaks.filter((peak) => !isWorms(peak));
+  const others = peaks.filter((peak) => !isWorms(peak, run));
   const other = power(others);
   const otherShare = other === 0 ? 0 : part.share * (other / power(peaks));
   const share = part.share - otherShare;

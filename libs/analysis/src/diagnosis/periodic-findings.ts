@@ -26,7 +26,8 @@ export function periodicErrorFindings(run: MeasuredRun, context: FindingContext)
   const { periodicError } = run;
   const part = guidedLines(run, 'ra')?.worm;
   if (periodicError === null || part === undefined) return [];
-  const { peakToPeakArcsec, steepestArcsecPerSecond, harmonics, periodSeconds } = periodicError;
+  const { peakToPeakArcsec, steepestArcsecPerSecond, harmonics } = periodicError;
+  const { periodSeconds, periodFrom } = periodicError;
   if (!harmonics.some((line) => line.amplitudeArcsec > SEEN_SIGMAS * line.standardError)) return [];
   const usual = context.usualPeriodicErrorArcsec;
   const growth = usual === null ? 0 : peakToPeakArcsec / usual;
@@ -47,7 +48,7 @@ export function periodicErrorFindings(run: MeasuredRun, context: FindingContext)
           ? `RA periodic error of ${size} is guided out: ${arcsec(part.rmsArcsec)} RMS is left.`
           : `RA periodic error of ${size} leaves ${arcsec(part.rmsArcsec)} RMS after guiding.`,
       evidence: [
-        `Worm ${seconds(periodSeconds)}; ${percent(part.share)} of the RA error.`,
+        `${periodFrom === 'rig' ? 'Worm' : 'Period from the spectrum'} ${seconds(periodSeconds)}; ${percent(part.share)} of the RA error.`,
         `Steepest ${ratio(steepestArcsecPerSecond)}″ a second.`,
       ],
       nextStep: nextStepFor(growing, steep, harm),
@@ -69,7 +70,7 @@ function nextStepFor(growing: boolean, steep: boolean, harm: Draft['severity']):
 export function lineFindings(run: MeasuredRun, context: FindingContext): Draft[] {
   return (['ra', 'dec'] as const).flatMap((axis) =>
     (run.spectrum?.[axis].peaks ?? [])
-      .filter((peak) => !isWorms(peak))
+      .filter((peak) => !isWorms(peak, run))
       .map((peak) => lineFinding(run, context, axis, peak))
       .filter(({ severity }) => severity !== 'fine'),
   );

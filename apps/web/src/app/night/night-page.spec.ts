@@ -36,7 +36,7 @@ const WORM: Finding = {
   sentence: 'The worm puts 0.46″ into RA.',
   evidence: ['It is 49 % of RA.'],
   nextStep: 'Clean and regrease the RA worm.',
-  gain: { rmsIfCuredArcsec: 0.461, aspectIfCured: null },
+  gain: { rmsIfCuredArcsec: 0.461, aspectIfCured: null, subsKeptIfCured: 31 },
   caution: 'Unpower the mount and hold the tube.',
 };
 

@@ -93,5 +93,8 @@ function gainsOf({ gain }: Finding): { label: string; value: string }[] {
     ...(gain.aspectIfCured === null
       ? []
       : [{ label: 'aspect without it', value: ratioText(gain.aspectIfCured) }]),
+    ...(gain.subsKeptIfCured === null
+      ? []
+      : [{ label: 'subs kept without it', value: String(gain.subsKeptIfCured) }]),
   ];
 }
