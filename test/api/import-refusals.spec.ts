@@ -22,7 +22,11 @@ import {
 const MIB = 1024 * 1024;
 const HEADER = 'timestamp,ra_error_arcsec,dec_error_arcsec\n';
 /** The eight bytes that every PNG begins with (PNG specification, 5.2), and zeros. */
-const PNG = Buffer.concat([Buffer.from('\x89PNG\r\n\x1a\n', 'latin1'), Buffer.alloc(500)]);
+/** A whole picture of one pixel. */
+const PNG = Buffer.from(
+  'iVBORw0KGgoAAAANSUhEUgAAAAEAAAABCAQAAAC1HAwCAAAAC0lEQVR42mNkYAAAAAYAAjCB0C8AAAAASUVORK5CYII=',
+  'base64',
+);
 
 let app: TestApp;
 let cast: Cast;
